@@ -24,14 +24,6 @@ type Profile struct {
 	Notes []Note
 }
 
-// Note is one thing that was found and mended in a track. Kind is a stable
-// word that the page translates; Count and AtM say how often and where first.
-type Note struct {
-	Kind  NoteKind
-	Count int
-	AtM   float64
-}
-
 // LengthM is the length along the road [m].
 func (p *Profile) LengthM() float64 {
 	if len(p.EdgeM) == 0 {
