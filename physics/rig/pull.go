@@ -28,7 +28,7 @@ func (g *Rig) Pegs(speedMps float64, gear int) Pegs {
 	cadence := g.CadenceAt(v, gear)
 	riderW := g.Rider.Power(cadence)
 	riderN := riderW * g.Bike.Train.Efficiency / v
-	toRoad := g.motorToRoad()
+	toRoad := g.MotorToRoad()
 	m := &g.Bike.Motor
 
 	var p Pegs
@@ -54,8 +54,8 @@ func (g *Rig) Pegs(speedMps float64, gear int) Pegs {
 	return p
 }
 
-// motorToRoad is the share of the motor's output that reaches the road.
-func (g *Rig) motorToRoad() float64 {
+// MotorToRoad is the share of the motor's output that reaches the road.
+func (g *Rig) MotorToRoad() float64 {
 	if g.Bike.Motor.Kind == motor.Crank {
 		return g.Bike.Train.Efficiency
 	}
@@ -82,19 +82,26 @@ func (g *Rig) PullAt(speedMps float64, gear int) Pull {
 // near is how much less pull a rider accepts for a cadence they like better.
 const near = 0.985
 
+// StrongestGear is the gear that pulls most at a speed [m/s], the easier one
+// of two that pull the same.
+func (g *Rig) StrongestGear(speedMps float64) int {
+	best, most := 0, 0.0
+	for i := range g.Gears {
+		if pull := g.PullAt(speedMps, i).Sum(); pull > most*(1+1e-9) {
+			best, most = i, pull
+		}
+	}
+	return best
+}
+
 // BestGear is the gear a rider would choose at a speed [m/s] when the hill
 // asks for all there is: most pull, and of those nearly as good the one whose
 // cadence lies nearest to the liked one.
 func (g *Rig) BestGear(speedMps float64) int {
-	most := 0.0
-	pulls := make([]float64, len(g.Gears))
-	for i := range g.Gears {
-		pulls[i] = g.PullAt(speedMps, i).Sum()
-		most = math.Max(most, pulls[i])
-	}
+	most := g.PullAt(speedMps, g.StrongestGear(speedMps)).Sum()
 	best, off := 0, math.Inf(1)
 	for i := range g.Gears {
-		if pulls[i] < near*most {
+		if g.PullAt(speedMps, i).Sum() < near*most {
 			continue
 		}
 		ratio := g.CadenceAt(speedMps, i) / g.Rider.CadenceLiked

@@ -64,15 +64,16 @@ type Limit uint8
 
 // The limits, in the order in which the page explains them.
 const (
-	Torque  Limit = iota // the motor's torque through this gear
-	Power                // the motor's power at this speed
-	Rider                // the rider's effort times the assist level
-	CutOff               // the law's speed limit on assistance
-	Cadence              // the crank motor's cadence range
-	Limits               // how many there are
+	Torque   Limit = iota // the motor's torque through this gear
+	Power                 // the motor's power at this speed
+	Rider                 // the rider's effort times the assist level
+	CutOff                // the law's speed limit on assistance
+	Cadence               // the crank motor's cadence range
+	Coasting              // the road drives and nobody pedals: not a limit on pull
+	Limits                // how many there are
 )
 
-var limitNames = [Limits]string{"torque", "power", "rider", "cut-off", "cadence"}
+var limitNames = [Limits]string{"torque", "power", "rider", "cut-off", "cadence", "coasting"}
 
 // String is the limit's name in files and on the command line.
 func (l Limit) String() string { return limitNames[l] }

@@ -1,0 +1,106 @@
+package ride
+
+import (
+	"math"
+
+	"hillwright/physics/rig"
+)
+
+// How a rider shifts. Common practice, no source.
+const (
+	restS      = 2.0     // seconds between one shift and the thought of the next
+	worthwhile = 1.003   // gain in pull for which a gear is changed
+	backAgain  = 1.06    // gain for which the last change is undone
+	legs       = 0.08    // how much nearer to the liked cadence a gear must bring
+	easedTo    = 1 / 3.0 // part of the pull that is kept while the chain moves
+)
+
+// shifter is the gear in use and the hand on the lever.
+type shifter struct {
+	gear, from int
+	leftS      float64 // of the shift under way
+	sinceS     float64 // since the last one
+	wish       []int   // best gear by speed, in steps of wishStep; −1 not yet known
+}
+
+const (
+	wishStep = 0.2
+	wishes   = 128
+)
+
+func newShifter(r *rig.Rig, startMps float64) shifter {
+	s := shifter{from: -1, sinceS: restS, wish: make([]int, wishes)}
+	for i := range s.wish {
+		s.wish[i] = -1
+	}
+	s.gear = s.best(r, math.Max(startMps, r.Rider.HoldMps/2))
+	return s
+}
+
+func (s *shifter) best(r *rig.Rig, v float64) int {
+	i := min(int(v/wishStep), wishes-1)
+	if s.wish[i] < 0 {
+		s.wish[i] = r.BestGear((float64(i) + 0.5) * wishStep)
+	}
+	return s.wish[i]
+}
+
+// choose begins a shift where another gear pulls enough more, or where the
+// cadence has left the rider's range.
+func (s *shifter) choose(r *rig.Rig, v float64) {
+	if s.leftS > 0 || s.sinceS < restS {
+		return
+	}
+	to := s.best(r, v)
+	if to == s.gear {
+		return
+	}
+	gain := r.PullAt(v, to).Sum() / math.Max(r.PullAt(v, s.gear).Sum(), 1e-9)
+	need, nearer := worthwhile, legs
+	if to == s.from {
+		need, nearer = backAgain, 3*legs
+	}
+	if gain < need && s.suits(r, v) && s.offLiked(r, v, s.gear)-s.offLiked(r, v, to) < nearer {
+		return
+	}
+	s.from, s.gear = s.gear, to
+	s.leftS, s.sinceS = r.Bike.ShiftS, 0
+}
+
+func (s *shifter) suits(r *rig.Rig, v float64) bool {
+	c := r.CadenceAt(v, s.gear)
+	return c >= r.Rider.CadenceLow && c <= r.Rider.CadenceHigh
+}
+
+// offLiked is how far the cadence of a gear lies from the liked one, as a
+// logarithm of their ratio.
+func (s *shifter) offLiked(r *rig.Rig, v float64, gear int) float64 {
+	return math.Abs(math.Log(math.Max(r.CadenceAt(v, gear), 1) / r.Rider.CadenceLiked))
+}
+
+// under tells whether a shift is under way.
+func (s *shifter) under() bool { return s.leftS > 0 }
+
+// ease is the part of the pull that the shift leaves.
+func (s *shifter) ease() float64 {
+	if s.under() {
+		return easedTo
+	}
+	return 1
+}
+
+// cap shortens a step so that it does not reach far beyond the shift's end.
+func (s *shifter) cap(v, h float64) float64 {
+	if !s.under() {
+		return h
+	}
+	return math.Min(h, math.Max(v*s.leftS, 0.02))
+}
+
+func (s *shifter) pass(dt float64) {
+	s.sinceS += dt
+	s.leftS -= dt
+	if s.leftS < 1e-6 {
+		s.leftS = 0
+	}
+}
