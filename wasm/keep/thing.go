@@ -1,7 +1,8 @@
 // Package keep is what is stored and passed on: bikes, riders, loads, days and
 // hills as named things whose values go by the dotted paths of physics/ask.
 // The shop's file, the device's database, the file that a person exports and
-// the take-away link all hold these. Start with Thing and Hill.
+// the take-away link all hold these. Start with Thing and Hill; Encode and
+// Decode write and read the file of everything that a person saved.
 package keep
 
 import "hillwright/physics/ask"
@@ -26,6 +27,7 @@ type Thing struct {
 	Names   map[string]string `json:"names"`
 	Values  map[string]string `json:"values"`
 	Sources map[string]string `json:"sources,omitempty"`
+	Changed int64             `json:"changed,omitempty"` // when, in seconds since 1970; 0 for the shop's
 }
 
 // Hill is a stored profile: edges along the road and heights [m]; grades follow
@@ -38,6 +40,7 @@ type Hill struct {
 	BearingDeg  []float64         `json:"bearing_deg,omitempty"`
 	HeightKnown bool              `json:"height_known"`
 	Sections    string            `json:"sections,omitempty"` // as typed, when it was typed
+	Changed     int64             `json:"changed,omitempty"`  // when, in seconds since 1970; 0 for the shop's
 }
 
 // Shop is one shop's copy: what its page starts with.
