@@ -1,0 +1,393 @@
+package words
+
+// Key is one text of the catalogue.
+type Key uint16
+
+// The catalogue. A comment above a key tells what its blanks {0}, {1} hold.
+const (
+	// The answer's word, its shape's name is the same.
+	VerdictClears Key = iota
+	VerdictTight
+	VerdictShort
+	VerdictClearsMeans
+	VerdictTightMeans
+	VerdictShortMeans
+
+	// The sentence with blanks. AskClimb: rider, load, bike, hill, day. AskRider:
+	// name, mass, power. AskLoad: name, mass. AskDay: name, temperature. AskRide:
+	// assist level, speed at the foot, law.
+	AskClimb
+	AskRider
+	AskLoad
+	AskDay
+	AskRide
+	AskLevel
+	AskLevelOff
+	AskLevelHighest
+	AskTouch
+	AskMore
+
+	// Headings of the page's parts.
+	HeadAnswer
+	HeadWhy
+	HeadInputs
+	HeadFigures
+	HeadPictures
+	HeadLimits
+	HeadBike
+	HeadRider
+	HeadLoad
+	HeadHill
+	HeadDay
+	HeadRide
+	HeadKept
+	HeadSettings
+	HeadCautions
+
+	// Names of the answer's figures.
+	LabelHardest
+	LabelBinds
+	LabelNext
+	LabelSetsSpeed
+	LabelHeadroom
+	LabelWanted
+	LabelAllowed
+	LabelSpeed
+	LabelMeanSpeed
+	LabelGear
+	LabelCadence
+	LabelTime
+	LabelRiderShare
+	LabelMotorShare
+	LabelRiderEnergy
+	LabelMotorEnergy
+	LabelPackEnergy
+	LabelPackPart
+	LabelLength
+	LabelAscent
+	LabelDescent
+	LabelGrade
+	LabelSteepest
+	LabelSteepestHeld
+	LabelStalledAt
+	LabelHeight
+	LabelDevelopment
+	LabelBand
+	LabelSource
+
+	// StretchAt: length, grade, where from along the road.
+	StretchAt
+
+	// SharePair: rider's and motor's part.
+	SharePair
+
+	// PackOf: energy used, part of the pack.
+	PackOf
+	HeadroomLeft
+	HeadroomShort
+	GearNone
+
+	// The limits: short for a peg's label, long as what it means, in one clause.
+	LimitTorque
+	LimitPower
+	LimitRider
+	LimitCutOff
+	LimitCadence
+	LimitTorqueLong
+	LimitPowerLong
+	LimitRiderLong
+	LimitCutOffLong
+	LimitCadenceLong
+
+	// The three pictures: title, what they show, and their text equivalents.
+	SectionTitle
+	SectionHelp
+
+	// SectionText: length, ascent, hardest stretch (StretchAt), headroom there.
+	SectionText
+
+	// SectionStalled: where it stops.
+	SectionStalled
+
+	// StaffText: where, grade, speed, gear, headroom.
+	StaffText
+	StaffLabel
+	Exaggeration
+	HatchOpen
+	HatchClose
+	HatchSolid
+	BalanceTitle
+	BalanceHelp
+
+	// BalanceText: wanted pull, grade, speed of the weighing.
+	BalanceText
+
+	// BalancePeg: limit, pull, headroom.
+	BalancePeg
+	BalanceWeight
+
+	// BalanceTried: the grade that a dragged weight stands for.
+	BalanceTried
+	PullTitle
+	PullHelp
+
+	// PullText: grade, speed, gear, limit that sets it.
+	PullText
+
+	// PullTextNone: grade.
+	PullTextNone
+	PullLoad
+	PullOutline
+	AxisSpeed
+	AxisPull
+	AxisLength
+	AxisHeight
+
+	// Buttons.
+	ButtonChange
+	ButtonDone
+	ButtonCancel
+	ButtonSave
+	ButtonSaveAs
+	ButtonForget
+	ButtonRename
+	ButtonChoose
+	ButtonUndo
+	ButtonMore
+	ButtonLess
+	ButtonClose
+	ButtonFile
+	ButtonSections
+	ButtonExport
+	ButtonImport
+	ButtonInstall
+	ButtonPrint
+	ButtonUseNew
+	ButtonBackToShop
+
+	// StepUp, StepDown: name of the input.
+	StepUp
+	StepDown
+
+	// Things that are kept.
+	KeptBikes
+	KeptRiders
+	KeptLoads
+	KeptHills
+	KeptDays
+	KeptNone
+	KeptName
+	KeptNameTaken
+
+	// KeptSaved, KeptForgotten: name.
+	KeptSaved
+	KeptForgotten
+	KeptChanged
+	FromShop
+
+	// Hills.
+	HillDrop
+	HillDropHelp
+	HillSections
+	HillSectionsHint
+	HillReading
+	HillRead
+	HillTyped
+	HillTrack
+	HillLevel
+
+	// The device, settings and the network.
+	OfflineReady
+	OfflineNow
+	NewVersion
+	SetLanguage
+	SetUnits
+	SetMetric
+	SetImperial
+	SetMark
+	SetPoint
+	SetComma
+	SetTheme
+	SetThemeSun
+	SetThemeDusk
+	SetThemeDevice
+	LanguageSelf
+	StorageRefused
+	StorageFull
+	StorageLoose
+
+	// ImportSummary: how many things are new, replaced, left out.
+	ImportSummary
+	ImportWrong
+	ImportNewer
+
+	// ExportDone: file name.
+	ExportDone
+	Working
+	Starting
+	NeedsWasm
+
+	// The panel when something broke.
+	BrokeTitle
+	BrokeKept
+	BrokeSave
+	BrokeGoOn
+	BrokeDetail
+
+	// Cautions.
+	CautionDescent
+	CautionBrakes
+	CautionGrip
+	CautionLoad
+	CautionLaw
+	CautionPractice
+	CautionEstimate
+
+	// Where a number came from.
+	SourceAssumed
+	SourceSheet
+	SourceMeasured
+
+	// Units that differ by language.
+	UnitTurnsPerMin
+	UnitTeeth
+
+	// Inputs, by path.
+	InRiderMass
+	InRiderPower
+	InCadenceLow
+	InCadenceLiked
+	InCadenceHigh
+	InCrank
+	InHoldSpeed
+	InBikeMass
+	InCrr
+	InCdA
+	InWheelDrag
+	InWheelInertia
+	InTyre
+	InRollout
+	InChainrings
+	InSprockets
+	InHubRatios
+	InDriveEfficiency
+	InShift
+	InMotorKind
+	InMotorTorque
+	InMotorPower
+	InMotorLevels
+	InMotorCadence
+	InMotorEfficiency
+	InPack
+	InLoadMass
+	InLoadCdA
+	InTemperature
+	InHumidity
+	InAltitude
+	InDensity
+	InWind
+	InWindFrom
+	InLevel
+	InStart
+	InDown
+	InLaw
+
+	// Choices of inputs, and what stands when nothing is given.
+	ChoiceNone
+	ChoiceCrank
+	ChoiceRearHub
+	ChoiceFrontHub
+	ChoiceEU25
+	ChoiceGB15
+	ChoiceUS1
+	ChoiceUS3
+	ChoiceJP24
+	ChoiceEU45
+	BlankTyre
+	BlankNoHub
+	BlankNoLevels
+	BlankHill
+	BlankComputed
+	BlankAhead
+	BlankHighest
+
+	// Notes on what was mended in a track. NoteAt and NoteTimes follow a note:
+	// count, place of the first.
+	NoteNoHeights
+	NoteZeroHeights
+	NoteSpike
+	NoteDuplicate
+	NotePause
+	NoteGap
+	NoteSegments
+	NoteCoarseHeights
+	NoteSomeHeights
+	NoteAt
+	NoteTimes
+	NotePlain
+
+	// Problems with inputs: name of the input, what was given, what was expected.
+	ProblemNoPath
+	ProblemGot
+	ProblemSource
+	ProblemLevel
+	ExpectNumber
+	ExpectWhole
+	ExpectList
+	ExpectChoice
+	ExpectTyre
+	ExpectOr
+
+	// What binds, as the subject of a sentence, without a capital. WhatTorque,
+	// WhatRider: gear; assist level. WhatCutOff: speed.
+	WhatTorque
+	WhatTorqueHub
+	WhatPower
+	WhatRider
+	WhatRiderAlone
+	WhatCutOff
+	WhatRatio
+	WhatCadence
+
+	// The stretch of the sentence: length, grade; where from. WhyUpTo: the
+	// steepest piece.
+	WhyStretch
+	WhyStretchUpTo
+	WhyWhole
+	WhyWholeUpTo
+
+	// WhyClears, WhyTight: stretch, wanted pull, what binds, its pull, headroom in
+	// per cent.
+	WhyClears
+	WhyTight
+
+	// WhyMomentum, WhyShort: stretch, wanted pull, what binds, its pull, speed of
+	// the weighing.
+	WhyMomentum
+	WhyShort
+
+	// WhyUnheld: stretch, wanted pull: no limit is known there.
+	WhyUnheld
+
+	// WhyStops: where.
+	WhyStops
+	WhyGivesUp
+
+	// WhySpeed, WhySlowest: speed, what sets it.
+	WhySpeed
+	WhySpeedToo
+	WhySlowest
+
+	// WhyDown: the hill does not climb anywhere: wanted pull, speed.
+	WhyDown
+
+	// Steady: grade.
+	SteadyAt
+
+	// SteadyHolds: steepest grade held. SteadySpeed: speed, what sets it.
+	SteadyHolds
+	SteadySpeed
+	SteadySpeedToo
+
+	keys // how many there are
+)

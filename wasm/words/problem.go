@@ -1,0 +1,71 @@
+package words
+
+import (
+	"errors"
+	"math"
+	"strconv"
+	"strings"
+
+	"hillwright/physics/ask"
+	"hillwright/physics/rig"
+)
+
+// Problem says an error in the reader's words: what, where, what was expected.
+// An error that the catalogue does not know is said as it is, in English.
+func (v Voice) Problem(err error) string {
+	if err == nil {
+		return ""
+	}
+	var input *ask.Problem
+	switch {
+	case errors.As(err, &input):
+		return v.inputProblem(input)
+	case errors.Is(err, rig.ErrLevel):
+		return v.text(ProblemLevel)
+	}
+	return err.Error()
+}
+
+func (v Voice) inputProblem(p *ask.Problem) string {
+	name, _ := v.Input(p.Path)
+	switch p.Kind {
+	case ask.NoSuchPath:
+		return v.Say(ProblemNoPath, name)
+	case ask.NoSuchSource:
+		var all []string
+		for _, k := range sourceNames {
+			all = append(all, v.text(k))
+		}
+		return v.Say(ProblemSource, capital(name), p.Got, strings.Join(all, ", "))
+	case ask.OutOfRange:
+		if got, err := strconv.ParseFloat(p.Got, 64); err == nil && !math.IsInf(got, 0) {
+			return v.Say(ProblemGot, capital(name), v.Value(p.Path, got), v.expected(p.Input))
+		}
+	}
+	return v.Say(ProblemGot, capital(name), p.Got, v.expected(p.Input))
+}
+
+// expected tells what an input takes, in shown units.
+func (v Voice) expected(in ask.Input) string {
+	text := ""
+	switch in.Form {
+	case ask.Choice:
+		var all []string
+		for _, c := range in.Choices {
+			all = append(all, v.Choice(in.Path, c))
+		}
+		return v.Say(ExpectChoice, strings.Join(all, "; "))
+	case ask.Tyre:
+		return v.text(ExpectTyre)
+	case ask.List:
+		text = v.Say(ExpectList, v.Entry(in.Path, in.Low), v.Entry(in.Path, in.High))
+	case ask.Whole:
+		text = v.Say(ExpectWhole, v.Entry(in.Path, in.Low), v.Entry(in.Path, in.High))
+	default:
+		text = v.Say(ExpectNumber, v.Entry(in.Path, in.Low), v.Value(in.Path, in.High))
+	}
+	if in.Blank == "" {
+		return text
+	}
+	return v.Say(ExpectOr, text, v.Choice(in.Path, in.Blank))
+}

@@ -1,0 +1,107 @@
+package words
+
+import (
+	"hillwright/physics/ask"
+	"hillwright/physics/hill"
+	"hillwright/physics/ride"
+	"hillwright/physics/rig"
+)
+
+// Tables from the computation's own words to keys. Arrays are indexed by its
+// constants; Check finds the ones that were forgotten.
+var (
+	limitNames = [rig.Limits]Key{
+		rig.Torque:  LimitTorque,
+		rig.Power:   LimitPower,
+		rig.Rider:   LimitRider,
+		rig.CutOff:  LimitCutOff,
+		rig.Cadence: LimitCadence,
+	}
+	limitMeanings = [rig.Limits]Key{
+		rig.Torque:  LimitTorqueLong,
+		rig.Power:   LimitPowerLong,
+		rig.Rider:   LimitRiderLong,
+		rig.CutOff:  LimitCutOffLong,
+		rig.Cadence: LimitCadenceLong,
+	}
+	verdictNames = []Key{ride.Clears: VerdictClears, ride.Tight: VerdictTight, ride.Short: VerdictShort}
+	sourceNames  = []Key{ask.Assumed: SourceAssumed, ask.Sheet: SourceSheet, ask.Measured: SourceMeasured}
+	noteTexts    = []Key{
+		hill.NoteNoHeights:     NoteNoHeights,
+		hill.NoteZeroHeights:   NoteZeroHeights,
+		hill.NoteSpike:         NoteSpike,
+		hill.NoteDuplicate:     NoteDuplicate,
+		hill.NotePause:         NotePause,
+		hill.NoteGap:           NoteGap,
+		hill.NoteSegments:      NoteSegments,
+		hill.NoteCoarseHeights: NoteCoarseHeights,
+		hill.NoteSomeHeights:   NoteSomeHeights,
+	}
+)
+
+// choice is the word of one choice, or blank, of one input.
+type choice struct {
+	path, word string
+	name       Key
+}
+
+var choices = []choice{
+	{"bike.motor.kind", "none", ChoiceNone},
+	{"bike.motor.kind", "crank", ChoiceCrank},
+	{"bike.motor.kind", "rear-hub", ChoiceRearHub},
+	{"bike.motor.kind", "front-hub", ChoiceFrontHub},
+	{"ride.law", "eu-25", ChoiceEU25},
+	{"ride.law", "gb-15mph", ChoiceGB15},
+	{"ride.law", "us-1", ChoiceUS1},
+	{"ride.law", "us-3", ChoiceUS3},
+	{"ride.law", "jp-24", ChoiceJP24},
+	{"ride.law", "eu-45", ChoiceEU45},
+	{"bike.rollout_m", "tyre", BlankTyre},
+	{"bike.hub_ratios", "none", BlankNoHub},
+	{"bike.motor.levels", "none", BlankNoLevels},
+	{"day.altitude_m", "hill", BlankHill},
+	{"day.density_kgm3", "computed", BlankComputed},
+	{"day.wind_from_deg", "ahead", BlankAhead},
+	{"ride.level", "highest", BlankHighest},
+}
+
+// Choice gives the person's word for a choice of an input ("crank" of
+// bike.motor.kind), or for the word that means "not given" ("tyre" of
+// bike.rollout_m). One that is not known is its own word.
+func (v Voice) Choice(path, word string) string {
+	for _, c := range choices {
+		if c.path == path && c.word == word {
+			return v.text(c.name)
+		}
+	}
+	return word
+}
+
+// Limit is a limit's short name, as on a peg's label.
+func (v Voice) Limit(l rig.Limit) string { return v.text(limitNames[l]) }
+
+// LimitLong tells in one clause what a limit is.
+func (v Voice) LimitLong(l rig.Limit) string { return v.text(limitMeanings[l]) }
+
+// Verdict is the word of an answer.
+func (v Voice) Verdict(x ride.Verdict) string { return v.text(verdictNames[x]) }
+
+// Source tells where a number came from.
+func (v Voice) Source(s ask.Source) string { return v.text(sourceNames[s]) }
+
+// Note tells what was mended in a track, how often and where first.
+func (v Voice) Note(n hill.Note) string {
+	text := v.text(noteTexts[n.Kind])
+	switch {
+	case everywhere(n.Kind) || n.Count < 1:
+		return v.Say(NotePlain, text)
+	case n.Count == 1:
+		return v.Say(NoteAt, text, v.Length(n.AtM))
+	}
+	return v.Say(NoteTimes, text, v.Number(float64(n.Count), 0), v.Length(n.AtM))
+}
+
+// everywhere tells that a note is of the whole track and not of places in it.
+func everywhere(k hill.NoteKind) bool {
+	return k == hill.NoteNoHeights || k == hill.NoteZeroHeights || k == hill.NoteCoarseHeights
+}

@@ -1,0 +1,141 @@
+package words
+
+import (
+	"math"
+
+	"hillwright/physics/motor"
+	"hillwright/physics/ride"
+	"hillwright/physics/rig"
+	"hillwright/physics/unit"
+)
+
+// level is the grade below which a hill does not climb for the sentence.
+const level = 0.003
+
+// Why says in one or two sentences why the answer is what it is: the hardest
+// stretch, the pull that it wants, the limit that binds and what it leaves,
+// where it stops or what sets the speed. All of it comes from the answer.
+func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
+	b := &a.Balance
+	if !a.Stalled && (b.WantedN <= 0 || b.Grade < level && a.Hardest.SteepestGrade < level) {
+		return v.Say(WhyDown, v.Speed(a.Hardest.Running.SpeedMps))
+	}
+	first := v.weigh(r, b, v.where(a), a.Verdict)
+	switch {
+	case a.Stalled:
+		return first + " " + v.Say(WhyStops, v.Length(a.StalledAtM))
+	case a.Verdict == ride.Short:
+		return first + " " + v.Say(WhyGivesUp)
+	}
+	return first + " " + v.speed(r, b, &a.Hardest.Running)
+}
+
+// where names the hardest stretch: its length, its grade, its steepest piece
+// where that reads differently, and where it begins.
+func (v Voice) where(a *ride.Answer) string {
+	h := &a.Hardest
+	length, mean, steepest := v.Length(h.ToM-h.FromM), v.Grade(h.Grade), v.Grade(h.SteepestGrade)
+	whole := h.FromM <= 0 && h.ToM >= a.LengthM
+	switch {
+	case whole && mean == steepest:
+		return v.Say(WhyWhole, length, mean)
+	case whole:
+		return v.Say(WhyWholeUpTo, length, mean, steepest)
+	case mean == steepest:
+		return v.Say(WhyStretch, length, mean, v.Length(h.FromM))
+	}
+	return v.Say(WhyStretchUpTo, length, mean, v.Length(h.FromM), steepest)
+}
+
+// weigh is the sentence of the balance at a place.
+func (v Voice) weigh(r *rig.Rig, b *ride.Balance, place string, verdict ride.Verdict) string {
+	wanted := v.Pull(b.WantedN)
+	if len(b.Pegs) == 0 {
+		return capital(v.Say(WhyUnheld, place, wanted))
+	}
+	peg := b.Pegs[0]
+	what := v.what(r, peg.Limit, b.Gear, b.SpeedMps)
+	if peg.Headroom < 0 {
+		k := WhyShort
+		if verdict != ride.Short {
+			k = WhyMomentum
+		}
+		return capital(v.Say(k, place, wanted, what, v.Pull(peg.PullN), v.Speed(b.SpeedMps)))
+	}
+	k := WhyClears
+	if verdict != ride.Clears {
+		k = WhyTight
+	}
+	return capital(v.Say(k, place, wanted, what, v.Pull(peg.PullN), v.spare(peg.Headroom)))
+}
+
+// spare writes a headroom of 0 or more without its words.
+func (v Voice) spare(part float64) string {
+	p := part * 100
+	return v.with(v.Number(p, decimals(p, step{1, 1})), "%")
+}
+
+// speed is the sentence of how fast it passes and what decides that.
+func (v Voice) speed(r *rig.Rig, b *ride.Balance, run *ride.Running) string {
+	speed := v.Speed(run.SpeedMps)
+	switch {
+	case len(b.Pegs) > 0 && b.Pegs[0].Headroom < 0:
+		return capital(v.Say(WhySlowest, speed, v.what(r, run.SetBy, run.Gear, run.SpeedMps)))
+	case len(b.Pegs) > 0 && b.Pegs[0].Limit == run.SetBy:
+		return capital(v.Say(WhySpeedToo, speed))
+	}
+	return capital(v.Say(WhySpeed, speed, v.what(r, run.SetBy, run.Gear, run.SpeedMps)))
+}
+
+// WhySteady says the same of one grade that goes on for ever.
+func (v Voice) WhySteady(r *rig.Rig, g unit.Grade, a *ride.SteadyAnswer) string {
+	b := &a.Balance
+	verdict := a.Verdict
+	if !a.Held {
+		verdict = ride.Short
+	}
+	first := v.weigh(r, b, v.Say(SteadyAt, v.Grade(g)), verdict)
+	steepest := v.Grade(b.SteepestGrade)
+	switch {
+	case !a.Held:
+		return first + " " + v.Say(SteadyHolds, steepest)
+	case len(b.Pegs) > 0 && b.Pegs[0].Limit == a.Running.SetBy:
+		return first + " " + v.Say(SteadySpeedToo, v.Speed(a.Running.SpeedMps), steepest)
+	}
+	what := v.what(r, a.Running.SetBy, a.Running.Gear, a.Running.SpeedMps)
+	return first + " " + v.Say(SteadySpeed, v.Speed(a.Running.SpeedMps), what, steepest)
+}
+
+// what names a limit as the subject of a sentence, for this rig in this gear.
+func (v Voice) what(r *rig.Rig, l rig.Limit, gear int, speedMps float64) string {
+	m := &r.Bike.Motor
+	switch l {
+	case rig.Torque:
+		if m.Kind != motor.Crank {
+			return v.text(WhatTorqueHub)
+		}
+		return v.Say(WhatTorque, v.Gear(r, gear))
+	case rig.Power:
+		return v.text(WhatPower)
+	case rig.CutOff:
+		// A law that sets a ratio limits far below its cut-off.
+		if r.Law.MaxRatio > 0 && speedMps < r.Law.SpeedMps-math.Max(r.Law.TaperMps, 0.5) {
+			return v.text(WhatRatio)
+		}
+		return v.Say(WhatCutOff, v.Speed(r.Law.SpeedMps))
+	case rig.Cadence:
+		return v.text(WhatCadence)
+	}
+	if m.Kind == motor.None || r.Level == 0 {
+		return v.text(WhatRiderAlone)
+	}
+	return v.Say(WhatRider, v.Number(float64(r.Level), 0))
+}
+
+// Gear names a gear by its teeth: "38/46", with a hub gear "38/18 · 3".
+func (v Voice) Gear(r *rig.Rig, gear int) string {
+	if gear < 0 || gear >= len(r.Gears) {
+		return v.text(GearNone)
+	}
+	return r.Gears[gear].Label
+}
