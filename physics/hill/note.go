@@ -22,4 +22,6 @@ type Note struct {
 	Kind  NoteKind
 	Count int
 	AtM   float64
+	// LengthM is the road that it concerns, all together [m]; 0 for points.
+	LengthM float64
 }

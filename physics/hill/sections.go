@@ -4,8 +4,6 @@ import (
 	"math"
 	"strconv"
 	"strings"
-	"unicode"
-	"unicode/utf8"
 
 	"hillwright/physics/unit"
 )
@@ -206,42 +204,4 @@ func parseGrade(s string) (unit.Grade, *SectionError) {
 		return 0, &SectionError{Kind: SectionGradeRange, Got: text}
 	}
 	return unit.Grade(g), nil
-}
-
-// leadingNumber reads a decimal number, with a sign of any kind and a point or
-// a comma as its mark, from the front.
-func leadingNumber(s string) (v float64, text, rest string, ok bool) {
-	s = strings.TrimSpace(s)
-	sign := 1.0
-	body := s
-	for _, minus := range []string{"-", "\u2212", "\u2013"} {
-		if after, found := strings.CutPrefix(body, minus); found {
-			sign, body = -1, strings.TrimLeft(after, " ")
-			break
-		}
-	}
-	body = strings.TrimPrefix(body, "+")
-	n, digits, marks := 0, 0, 0
-	for ; n < len(body); n++ {
-		c := body[n]
-		switch {
-		case isDigit(c):
-			digits++
-		case (c == '.' || c == ',') && marks == 0:
-			marks++
-		default:
-			c = 0
-		}
-		if c == 0 {
-			break
-		}
-	}
-	for n < len(body) && (isDigit(body[n]) || (body[n] == '.' || body[n] == ',')) && false {
-		n++
-	}
-	v, err := strconv.ParseFloat(strings.Replace(body[:n], ",", ".", 1), 64)
-	if err != nil || digits == 0 {
-		return 0, "", s, false
-	}
-	return sign * v, s[:len(s)-len(body)+n], body[n:], true
 }
