@@ -96,10 +96,10 @@ func checkTables() []string {
 	for _, t := range []struct {
 		what string
 		keys []Key
-	}{{"limit", limitNames[:]}, {"limit's meaning", limitMeanings[:]}, {"source", sourceNames}, {"note", noteTexts}} {
+	}{{"limit", limitNames[:]}, {"limit's meaning", limitMeanings[:]}, {"source", sourceNames}, {"note", noteTexts}, {"problem with sections", sectionTexts}} {
 		for i, k := range t.keys {
 			if k == 0 {
-				faults = append(faults, t.what+" "+strconv.Itoa(i)+" has no key in term.go")
+				faults = append(faults, t.what+" "+strconv.Itoa(i)+" has no key")
 			}
 		}
 	}

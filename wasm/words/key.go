@@ -93,11 +93,13 @@ const (
 	LimitRider
 	LimitCutOff
 	LimitCadence
+	LimitCoasting
 	LimitTorqueLong
 	LimitPowerLong
 	LimitRiderLong
 	LimitCutOffLong
 	LimitCadenceLong
+	LimitCoastingLong
 
 	// The three pictures: title, what they show, and their text equivalents.
 	SectionTitle
@@ -240,6 +242,7 @@ const (
 	CautionGrip
 	CautionLoad
 	CautionLaw
+	CautionWorkshop
 	CautionPractice
 	CautionEstimate
 
@@ -292,7 +295,8 @@ const (
 	InDown
 	InLaw
 
-	// Choices of inputs, and what stands when nothing is given.
+	// Choices of inputs (laws: their cut-off), and what stands when nothing is
+	// given.
 	ChoiceNone
 	ChoiceCrank
 	ChoiceRearHub
@@ -338,6 +342,26 @@ const (
 	ExpectTyre
 	ExpectOr
 
+	// Problems with typed sections. SectionAt: number, text as typed, what is
+	// wrong. SectionsAll: what is wrong. The others: the part that does not fit,
+	// or the bounds.
+	SectionAt
+	SectionsAll
+	SectionLike
+	SectionsEmpty
+	SectionEmpty
+	SectionNoLength
+	SectionNoUnit
+	SectionNoGrade
+	SectionNoPercent
+	SectionAmbiguous
+	SectionLeftOver
+	SectionLengthRange
+	SectionGradeRange
+	SectionsTooShort
+	SectionsTooLong
+	SectionsTooMany
+
 	// What binds, as the subject of a sentence, without a capital. WhatTorque,
 	// WhatRider: gear; assist level. WhatCutOff: speed.
 	WhatTorque
@@ -348,6 +372,7 @@ const (
 	WhatCutOff
 	WhatRatio
 	WhatCadence
+	WhatCoasting
 
 	// The stretch of the sentence: length, grade; where from. WhyUpTo: the
 	// steepest piece.
@@ -372,6 +397,9 @@ const (
 	// WhyStops: where.
 	WhyStops
 	WhyGivesUp
+
+	// WhyStopsThough: where, though there was pull for the hardest place.
+	WhyStopsThough
 
 	// WhySpeed, WhySlowest: speed, what sets it.
 	WhySpeed

@@ -4,10 +4,12 @@ import (
 	"math"
 	"strconv"
 	"strings"
+	"unicode"
 )
 
 const (
 	thin  = "\u202f" // narrow no-break space: between number and unit, and thousands
+	wide  = "\u00a0" // no-break space: between minutes and seconds
 	minus = "\u2212" // minus sign
 	dash  = "–"      // what stands where there is no number
 )
@@ -80,42 +82,53 @@ func (v Voice) with(number, unit string) string {
 }
 
 // ParseNumber reads a number as a person types it: either decimal mark, blanks
-// of any width between thousands, any kind of minus sign, and a sign in front. A single
-// mark is the decimal mark; of two different marks the last one is. ok is
-// false where that makes no finite number.
+// of any width or the other mark between thousands, any kind of minus sign. A
+// single mark is the decimal mark; of two different ones the last is. ok is
+// false where that makes no finite number, and where blanks or marks stand
+// anywhere but between thousands.
 func (v Voice) ParseNumber(text string) (value float64, ok bool) {
-	var b strings.Builder
-	points, commas := strings.Count(text, "."), strings.Count(text, ",")
-	decimal := '.'
-	switch {
-	case points > 0 && commas > 0:
-		decimal = rune(text[strings.LastIndexAny(text, ".,")])
-	case commas > 0:
-		decimal = ','
-	}
-	if points > 1 && commas > 1 || points > 1 && commas == 0 || commas > 1 && points == 0 {
-		return 0, false
-	}
-	for _, r := range strings.TrimSpace(text) {
-		switch {
-		case r >= '0' && r <= '9':
-			b.WriteRune(r)
-		case r == decimal:
-			b.WriteByte('.')
-		case r == '.' || r == ',' || isBlank(r) || r == '\'' || r == '’':
-			// between thousands
-		case r == '-' || r == '−' || r == '–' || r == '‐' || r == '‑' || r == '－':
-			b.WriteByte('-')
-		case r == '+':
-			b.WriteByte('+')
-		default:
+	rest, negative := sign(strings.TrimSpace(text))
+	whole, part := rest, ""
+	if at := strings.LastIndexAny(rest, ".,"); at >= 0 {
+		if strings.Count(rest, rest[at:at+1]) > 1 {
 			return 0, false
 		}
+		whole, part = rest[:at], rest[at+1:]
 	}
-	value, err := strconv.ParseFloat(b.String(), 64)
-	return value, err == nil && !math.IsInf(value, 0)
+	whole, ok = joinThousands(whole)
+	if !ok || !digits(part) || whole+part == "" {
+		return 0, false
+	}
+	value, err := strconv.ParseFloat("0"+whole+"."+part+"0", 64)
+	if negative {
+		value = -value
+	}
+	return value, err == nil
 }
 
-func isBlank(r rune) bool {
-	return r == ' ' || r == '\u00a0' || r == '\u202f' || r == '\u2009' || r == '\u2007'
+// sign takes the sign off the front of a number.
+func sign(text string) (rest string, negative bool) {
+	for _, m := range []string{"-", minus, "–", "‐", "‑", "－"} {
+		if after, found := strings.CutPrefix(text, m); found {
+			return strings.TrimSpace(after), true
+		}
+	}
+	return strings.TrimPrefix(text, "+"), false
 }
+
+// joinThousands takes out what stands between thousands; ok is false where
+// a group but the first has not three digits.
+func joinThousands(whole string) (joined string, ok bool) {
+	groups := strings.FieldsFunc(whole, func(r rune) bool {
+		return r == '.' || r == ',' || r == '\'' || r == '’' || unicode.IsSpace(r)
+	})
+	for i, g := range groups {
+		if !digits(g) || i > 0 && len(g) != 3 || i == 0 && len(groups) > 1 && len(g) > 3 {
+			return "", false
+		}
+		joined += g
+	}
+	return joined, true
+}
+
+func digits(s string) bool { return strings.Trim(s, "0123456789") == "" }

@@ -18,10 +18,15 @@ const (
 
 // Speed writes a speed [m/s] in km/h or mph, with one decimal.
 func (v Voice) Speed(mps float64) string {
+	value, unitName := v.speedIn(mps)
+	return v.with(v.Number(value, 1), unitName)
+}
+
+func (v Voice) speedIn(mps float64) (value float64, unitName string) {
 	if v.Units == Imperial {
-		return v.with(v.Number(unit.Speed(mps).MPH(), 1), "mph")
+		return unit.Speed(mps).MPH(), "mph"
 	}
-	return v.with(v.Number(unit.Speed(mps).KMH(), 1), "km/h")
+	return unit.Speed(mps).KMH(), "km/h"
 }
 
 // Length writes a length along the road [m]: m below a kilometre, then km; ft
@@ -103,7 +108,7 @@ func (v Voice) Duration(s float64) string {
 	two := func(big float64, bigUnit string, small float64, smallUnit string) string {
 		text := sign + v.with(v.Number(big, 0), bigUnit)
 		if small > 0 {
-			text += thin + v.with(v.Number(small, 0), smallUnit)
+			text += wide + v.with(v.Number(small, 0), smallUnit)
 		}
 		return text
 	}

@@ -5,24 +5,27 @@ import (
 	"hillwright/physics/hill"
 	"hillwright/physics/ride"
 	"hillwright/physics/rig"
+	"hillwright/physics/rule"
 )
 
 // Tables from the computation's own words to keys. Arrays are indexed by its
 // constants; Check finds the ones that were forgotten.
 var (
 	limitNames = [rig.Limits]Key{
-		rig.Torque:  LimitTorque,
-		rig.Power:   LimitPower,
-		rig.Rider:   LimitRider,
-		rig.CutOff:  LimitCutOff,
-		rig.Cadence: LimitCadence,
+		rig.Torque:   LimitTorque,
+		rig.Power:    LimitPower,
+		rig.Rider:    LimitRider,
+		rig.CutOff:   LimitCutOff,
+		rig.Cadence:  LimitCadence,
+		rig.Coasting: LimitCoasting,
 	}
 	limitMeanings = [rig.Limits]Key{
-		rig.Torque:  LimitTorqueLong,
-		rig.Power:   LimitPowerLong,
-		rig.Rider:   LimitRiderLong,
-		rig.CutOff:  LimitCutOffLong,
-		rig.Cadence: LimitCadenceLong,
+		rig.Torque:   LimitTorqueLong,
+		rig.Power:    LimitPowerLong,
+		rig.Rider:    LimitRiderLong,
+		rig.CutOff:   LimitCutOffLong,
+		rig.Cadence:  LimitCadenceLong,
+		rig.Coasting: LimitCoastingLong,
 	}
 	verdictNames = []Key{ride.Clears: VerdictClears, ride.Tight: VerdictTight, ride.Short: VerdictShort}
 	sourceNames  = []Key{ask.Assumed: SourceAssumed, ask.Sheet: SourceSheet, ask.Measured: SourceMeasured}
@@ -70,11 +73,21 @@ var choices = []choice{
 // bike.rollout_m). One that is not known is its own word.
 func (v Voice) Choice(path, word string) string {
 	for _, c := range choices {
-		if c.path == path && c.word == word {
-			return v.text(c.name)
+		if c.path != path || c.word != word {
+			continue
 		}
+		if law, ok := rule.ByID(word); ok {
+			return v.Say(c.name, v.cutOff(&law))
+		}
+		return v.text(c.name)
 	}
 	return word
+}
+
+// cutOff is the speed at which a law ends assistance.
+func (v Voice) cutOff(law *rule.Law) string {
+	value, unitName := v.speedIn(law.SpeedMps)
+	return v.with(v.short(value, 1), unitName)
 }
 
 // Limit is a limit's short name, as on a peg's label.

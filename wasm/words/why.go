@@ -22,6 +22,8 @@ func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 	}
 	first := v.weigh(r, b, v.where(a), a.Verdict)
 	switch {
+	case a.Stalled && b.Headroom() > 0:
+		return first + " " + v.Say(WhyStopsThough, v.Length(a.StalledAtM))
 	case a.Stalled:
 		return first + " " + v.Say(WhyStops, v.Length(a.StalledAtM))
 	case a.Verdict == ride.Short:
@@ -63,7 +65,7 @@ func (v Voice) weigh(r *rig.Rig, b *ride.Balance, place string, verdict ride.Ver
 		return capital(v.Say(k, place, wanted, what, v.Pull(peg.PullN), v.Speed(b.SpeedMps)))
 	}
 	k := WhyClears
-	if verdict != ride.Clears {
+	if peg.Headroom < ride.TightBelow {
 		k = WhyTight
 	}
 	return capital(v.Say(k, place, wanted, what, v.Pull(peg.PullN), v.spare(peg.Headroom)))
@@ -122,9 +124,11 @@ func (v Voice) what(r *rig.Rig, l rig.Limit, gear int, speedMps float64) string 
 		if r.Law.MaxRatio > 0 && speedMps < r.Law.SpeedMps-math.Max(r.Law.TaperMps, 0.5) {
 			return v.text(WhatRatio)
 		}
-		return v.Say(WhatCutOff, v.Speed(r.Law.SpeedMps))
+		return v.Say(WhatCutOff, v.cutOff(&r.Law))
 	case rig.Cadence:
 		return v.text(WhatCadence)
+	case rig.Coasting:
+		return v.text(WhatCoasting)
 	}
 	if m.Kind == motor.None || r.Level == 0 {
 		return v.text(WhatRiderAlone)
