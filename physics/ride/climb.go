@@ -46,16 +46,21 @@ type run struct {
 	opt  Options
 	easy Balance // the weighing of a level road: its pegs hold everywhere
 
+	state
+	stalled bool
+
+	trace  Trace
+	nextM  float64
+	everyM float64
+	passed []Running // how each piece was passed, at its slowest
+}
+
+// state is what a step of the computation changes.
+type state struct {
 	atM, timeS, kineticJ float64
+	netN                 float64 // pull less load at the end of the last step
 	shift                shifter
 	sums                 Energy
-	stalled              bool
-
-	trace   Trace
-	nextM   float64
-	everyM  float64
-	slowest []float64 // lowest speed on each piece [m/s]
-	slowRun []Running // how it ran there
 }
 
 func newRun(r *rig.Rig, p *hill.Profile, o Options) *run {
@@ -64,11 +69,7 @@ func newRun(r *rig.Rig, p *hill.Profile, o Options) *run {
 	s.sums.KineticStartJ = s.kineticJ
 	s.shift = newShifter(r, o.StartMps)
 	s.everyM = math.Max(2, p.LengthM()/tracePoints)
-	s.slowest = make([]float64, len(p.Grade))
-	s.slowRun = make([]Running, len(p.Grade))
-	for i := range s.slowest {
-		s.slowest[i] = math.Inf(1)
-	}
+	s.passed = make([]Running, len(p.Grade))
 	return s
 }
 
@@ -83,17 +84,15 @@ func (s *run) piece(i int) bool {
 	end := s.hill.EdgeM[i+1]
 	coast := wanted(s.rig, &at, s.opt.DownMps) < 0
 	s.mark(i, &at, coast)
+	settled := false // passed[i] holds a speed that was not still rising
 	for s.atM < end {
-		before := s.speed()
-		h := math.Min(end-s.atM, s.shift.cap(before, s.stepM(before)))
-		s.shift.choose(s.rig, before)
-		s.step(&at, h, coast)
-		if s.atM > end-1e-9 {
-			s.atM = end
-		}
+		s.shift.choose(s.rig, s.speed())
+		before, shifting := s.speed(), s.shift.under()
+		s.advance(&at, end, coast)
 		after := s.speed()
-		if after < s.slowest[i] {
-			s.slowest[i], s.slowRun[i] = after, s.running(after, coast)
+		if falling := after <= before && !shifting; !settled || falling && after < s.passed[i].SpeedMps {
+			s.passed[i] = s.running(after, coast)
+			settled = settled || falling
 		}
 		if s.hasStalled(before, after) {
 			s.stalled = true
@@ -107,10 +106,36 @@ func (s *run) piece(i int) bool {
 	return true
 }
 
-// stepM is the length of a step [m]: short where the speed is small and
-// changes fast, half a second of road otherwise.
+// closeM is how near to the place where something happens (a shift, a stall) a
+// step must end [m].
+const closeM = 0.002
+
+// advance takes a step, a shorter one when something happens within it, so
+// that events do not depend on where the steps happen to fall.
+func (s *run) advance(at *Place, end float64, coast bool) {
+	was := s.state
+	before := s.speed()
+	for h := math.Min(end-s.atM, s.stepM(before)); ; h /= 2 {
+		s.step(at, h, coast)
+		if s.atM > end-1e-9 {
+			s.atM = end
+		}
+		after := s.speed()
+		if h < closeM || !s.shift.wants(s.rig, after) && !s.hasStalled(before, after) {
+			return
+		}
+		s.state = was
+	}
+}
+
+// stepM is the length of the next step [m]: half a second of road, less where
+// the kinetic energy changes fast, and no further than a shift lasts.
 func (s *run) stepM(v float64) float64 {
-	return s.opt.StepScale * math.Max(0.05, math.Min(5, v/2))
+	h := math.Min(5, v/2)
+	if change := math.Abs(s.netN); change*h > 0.2*s.kineticJ {
+		h = 0.2 * s.kineticJ / change
+	}
+	return s.shift.cap(v, s.opt.StepScale*math.Max(0.02, h))
 }
 
 // hasStalled tells whether the rig can no longer keep itself up: slower than
@@ -156,6 +181,7 @@ func (s *run) step(at *Place, h float64, coast bool) {
 		}
 	}
 	s.kineticJ = kinetic
+	s.netN = k4.net
 	s.atM += h
 	s.sums.RiderJ += riderJ
 	s.sums.MotorJ += motorJ

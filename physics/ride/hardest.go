@@ -49,9 +49,9 @@ func (s *run) stretch(worst int) Stretch {
 		st.Grade = s.hill.Grade[worst]
 	}
 	slow := math.Inf(1)
-	for i := from; i <= to; i++ {
-		if s.slowest[i] < slow {
-			slow, st.Running = s.slowest[i], s.slowRun[i]
+	for _, run := range s.passed[from : to+1] {
+		if run.SpeedMps > 0 && run.SpeedMps < slow {
+			slow, st.Running = run.SpeedMps, run
 		}
 	}
 	return st

@@ -45,26 +45,31 @@ func (s *shifter) best(r *rig.Rig, v float64) int {
 	return s.wish[i]
 }
 
-// choose begins a shift where another gear pulls enough more, or where the
-// cadence has left the rider's range.
+// choose begins a shift where one is wanted.
 func (s *shifter) choose(r *rig.Rig, v float64) {
-	if s.leftS > 0 || s.sinceS < restS {
-		return
+	if s.wants(r, v) {
+		s.from, s.gear = s.gear, s.best(r, v)
+		s.leftS, s.sinceS = r.Bike.ShiftS, 0
+	}
+}
+
+// wants tells whether the rider would shift now: where another gear pulls
+// enough more, or suits the legs better, or the cadence has left their range.
+func (s *shifter) wants(r *rig.Rig, v float64) bool {
+	if s.under() || s.sinceS < restS {
+		return false
 	}
 	to := s.best(r, v)
 	if to == s.gear {
-		return
+		return false
 	}
-	gain := r.PullAt(v, to).Sum() / math.Max(r.PullAt(v, s.gear).Sum(), 1e-9)
 	need, nearer := worthwhile, legs
 	if to == s.from {
 		need, nearer = backAgain, 3*legs
 	}
-	if gain < need && s.suits(r, v) && s.offLiked(r, v, s.gear)-s.offLiked(r, v, to) < nearer {
-		return
-	}
-	s.from, s.gear = s.gear, to
-	s.leftS, s.sinceS = r.Bike.ShiftS, 0
+	return r.PullAt(v, to).Sum() >= need*r.PullAt(v, s.gear).Sum() ||
+		s.offLiked(r, v, s.gear)-s.offLiked(r, v, to) >= nearer ||
+		!s.suits(r, v)
 }
 
 func (s *shifter) suits(r *rig.Rig, v float64) bool {
