@@ -121,7 +121,8 @@ func (s *run) advance(at *Place, end float64, coast bool) {
 			s.atM = end
 		}
 		after := s.speed()
-		if h < closeM || !s.shift.wants(s.rig, after) && !s.hasStalled(before, after) {
+		happened := s.shift.wants(s.rig, after) || s.hasStalled(before, after) || was.shift.endedBefore(s.timeS-was.timeS)
+		if h < closeM || !happened {
 			return
 		}
 		s.state = was

@@ -86,6 +86,11 @@ func (s *shifter) offLiked(r *rig.Rig, v float64, gear int) float64 {
 // under tells whether a shift is under way.
 func (s *shifter) under() bool { return s.leftS > 0 }
 
+// endedBefore tells whether the shift under way is over well before s seconds.
+func (s *shifter) endedBefore(seconds float64) bool {
+	return s.under() && seconds > s.leftS+0.001
+}
+
 // ease is the part of the pull that the shift leaves.
 func (s *shifter) ease() float64 {
 	if s.under() {
