@@ -96,7 +96,11 @@ func checkTables() []string {
 	for _, t := range []struct {
 		what string
 		keys []Key
-	}{{"limit", limitNames[:]}, {"limit's meaning", limitMeanings[:]}, {"source", sourceNames}, {"note", noteTexts}, {"problem with sections", sectionTexts}} {
+	}{
+		{"limit", limitNames[:]}, {"limit's meaning", limitMeanings[:]}, {"source", sourceNames},
+		{"note", noteTexts}, {"problem with sections", sectionTexts},
+		{"problem with tracks", trackTexts}, {"look of a file", lookTexts},
+	} {
 		for i, k := range t.keys {
 			if k == 0 {
 				faults = append(faults, t.what+" "+strconv.Itoa(i)+" has no key")

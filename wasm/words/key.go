@@ -326,6 +326,9 @@ const (
 	NoteSegments
 	NoteCoarseHeights
 	NoteSomeHeights
+
+	// NoteOver follows a note that concerns a length of road.
+	NoteOver
 	NoteAt
 	NoteTimes
 	NotePlain
@@ -361,6 +364,40 @@ const (
 	SectionsTooShort
 	SectionsTooLong
 	SectionsTooMany
+
+	// Problems with track files. TrackAtLine: line, what is wrong. TrackPoints:
+	// how many were read. The others: what was got, or the bound.
+	TrackProblem
+	TrackAtLine
+	TrackPoints
+	TrackEmpty
+	TrackWrongFile
+	TrackDoctype
+	TrackBroken
+	TrackCutOff
+	TrackTooLarge
+	TrackTooManyPoints
+	TrackNoPoints
+	TrackBadPlace
+	TrackCancelled
+	TrackUnreadable
+	TrackTooShort
+	TrackBadOption
+
+	// What a wrong file looks like.
+	LooksUnknown
+	LooksFIT
+	LooksZIP
+	LooksJPEG
+	LooksPNG
+	LooksPDF
+	LooksGzip
+	LooksHTML
+	LooksKML
+	LooksTCX
+	LooksXML
+	LooksJSON
+	LooksText
 
 	// What binds, as the subject of a sentence, without a capital. WhatTorque,
 	// WhatRider: gear; assist level. WhatCutOff: speed.

@@ -19,11 +19,14 @@ func (v Voice) Problem(err error) string {
 	}
 	var input *ask.Problem
 	var section *hill.SectionError
+	var track *hill.TrackError
 	switch {
 	case errors.As(err, &input):
 		return v.inputProblem(input)
 	case errors.As(err, &section):
 		return v.sectionProblem(section)
+	case errors.As(err, &track):
+		return v.trackProblem(track)
 	case errors.Is(err, rig.ErrLevel):
 		return v.text(ProblemLevel)
 	}
@@ -72,43 +75,4 @@ func (v Voice) expected(in ask.Input) string {
 		return text
 	}
 	return v.Say(ExpectOr, text, v.Choice(in.Path, in.Blank))
-}
-
-// sectionTexts says what is wrong with typed sections.
-var sectionTexts = []Key{
-	hill.SectionsEmpty:      SectionsEmpty,
-	hill.SectionEmpty:       SectionEmpty,
-	hill.SectionNoLength:    SectionNoLength,
-	hill.SectionNoUnit:      SectionNoUnit,
-	hill.SectionNoGrade:     SectionNoGrade,
-	hill.SectionNoPercent:   SectionNoPercent,
-	hill.SectionAmbiguous:   SectionAmbiguous,
-	hill.SectionLeftOver:    SectionLeftOver,
-	hill.SectionLengthRange: SectionLengthRange,
-	hill.SectionGradeRange:  SectionGradeRange,
-	hill.SectionsTooShort:   SectionsTooShort,
-	hill.SectionsTooLong:    SectionsTooLong,
-	hill.SectionsTooMany:    SectionsTooMany,
-}
-
-func (v Voice) sectionProblem(e *hill.SectionError) string {
-	first, second := e.Got, ""
-	switch e.Kind {
-	case hill.SectionLengthRange:
-		second = v.Length(hill.LongestTypedM)
-	case hill.SectionGradeRange:
-		second = v.Grade(hill.SteepestTyped)
-	case hill.SectionsTooShort:
-		first = v.Height(hill.ShortestTypedM)
-	case hill.SectionsTooLong:
-		first = v.Length(hill.LongestTypedM)
-	case hill.SectionsTooMany:
-		first = v.Number(hill.MostTyped, 0)
-	}
-	what := v.Say(sectionTexts[e.Kind], first, second)
-	example := v.Say(SectionLike, v.text(HillSectionsHint))
-	if e.Section == 0 {
-		return v.Say(SectionsAll, what) + " " + example
-	}
-	return v.Say(SectionAt, v.Number(float64(e.Section), 0), e.Text, what) + " " + example
 }

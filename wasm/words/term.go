@@ -105,6 +105,9 @@ func (v Voice) Source(s ask.Source) string { return v.text(sourceNames[s]) }
 // Note tells what was mended in a track, how often and where first.
 func (v Voice) Note(n hill.Note) string {
 	text := v.text(noteTexts[n.Kind])
+	if n.LengthM > 0 {
+		text = v.Say(NoteOver, text, v.Length(n.LengthM))
+	}
 	switch {
 	case everywhere(n.Kind) || n.Count < 1:
 		return v.Say(NotePlain, text)
