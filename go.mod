@@ -15,10 +15,19 @@ require (
 	github.com/hexops/vecty v0.6.0
 	github.com/muktihari/fit v0.26.1
 	github.com/rogpeppe/go-internal v1.16.0
-	github.com/tdewolff/minify/v2 v2.24.0
+	github.com/tdewolff/minify/v2 v2.24.25
 	github.com/tdewolff/parse/v2 v2.8.20
 	gonum.org/v1/gonum v0.17.0
 	honnef.co/go/tools v0.8.2
 	pgregory.net/rapid v1.3.0
 	rsc.io/qr v0.2.0
 )
+
+require (
+	golang.org/x/exp/typeparams v0.0.0-20231108232855-2478ac86f678 // indirect
+	golang.org/x/mod v0.41.0 // indirect
+	golang.org/x/sync v0.23.0 // indirect
+	golang.org/x/tools v0.51.0 // indirect
+)
+
+tool honnef.co/go/tools/cmd/staticcheck

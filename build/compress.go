@@ -1,0 +1,73 @@
+package build
+
+import (
+	"bytes"
+	"compress/gzip"
+	"io"
+	"runtime"
+	"sync"
+
+	"github.com/andybalholm/brotli"
+)
+
+// compress gives every file that gains by it a gzip and a brotli sibling. The
+// files are independent of each other, so all processors work at once; the
+// outcome does not depend on their order.
+func (p *Page) compress() error {
+	files := p.Files()
+	errs := make([]error, len(files))
+	var running sync.WaitGroup
+	free := make(chan struct{}, runtime.NumCPU())
+	for i, f := range files {
+		if kindOf(f.Name) == "image/png" {
+			continue
+		}
+		running.Add(1)
+		free <- struct{}{}
+		go func() {
+			defer running.Done()
+			errs[i] = f.compress()
+			<-free
+		}()
+	}
+	running.Wait()
+	for _, err := range errs {
+		if err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+func (f *File) compress() error {
+	zipped, err := squeezed(f.Data, func(w io.Writer) (io.WriteCloser, error) {
+		return gzip.NewWriterLevel(w, gzip.BestCompression)
+	})
+	if err != nil {
+		return err
+	}
+	small, err := squeezed(f.Data, func(w io.Writer) (io.WriteCloser, error) {
+		return brotli.NewWriterOptions(w, brotli.WriterOptions{Quality: brotli.BestCompression, LGWin: 22}), nil
+	})
+	f.Gzip, f.Brotli = zipped, small
+	return err
+}
+
+// squeezed compresses data; nil when that gains nothing.
+func squeezed(data []byte, open func(io.Writer) (io.WriteCloser, error)) ([]byte, error) {
+	var out bytes.Buffer
+	w, err := open(&out)
+	if err != nil {
+		return nil, err
+	}
+	if _, err := w.Write(data); err != nil {
+		return nil, err
+	}
+	if err := w.Close(); err != nil {
+		return nil, err
+	}
+	if out.Len() >= len(data) {
+		return nil, nil
+	}
+	return out.Bytes(), nil
+}

@@ -1,0 +1,116 @@
+// Package build makes the page of one shop: a folder of static files that any
+// server can serve under any path. It is the pack step as a library, one
+// subject a file: compile, render, minify, fingerprint, precache list,
+// compress, budgets, write. Start with Compile and then Pack.
+package build
+
+import (
+	"io/fs"
+	"strings"
+
+	"hillwright/build/shop"
+)
+
+// Parts is what a page is made of. Site holds the shell, the styles and the
+// scripts (site.Files); Shop is the shop's folder; Program is what Compile
+// gave; Budget is what the page may weigh.
+type Parts struct {
+	Site    fs.FS
+	Shop    fs.FS
+	Program Program
+	Budget  Budget
+}
+
+// Pack makes the page in the folder out, which is replaced as a whole when it
+// holds an older page, and must be new or empty otherwise. Nothing is written
+// unless everything succeeds. Mistakes in the shop's folder come as
+// shop.Mistakes, a page that is too heavy as *TooHeavy with the report.
+func Pack(parts Parts, out string) (*Report, error) {
+	page, err := Assemble(parts)
+	if err != nil {
+		return nil, err
+	}
+	report := weigh(page, parts.Budget)
+	if err := report.check(); err != nil {
+		return report, err
+	}
+	return report, write(page, out)
+}
+
+// Assemble makes the page in memory, compressed siblings included.
+func Assemble(parts Parts) (*Page, error) {
+	own, err := shop.Read(parts.Shop)
+	if err != nil {
+		return nil, err
+	}
+	p := &Page{files: map[string]*File{}}
+	names, err := p.addHashed(parts, own)
+	if err != nil {
+		return nil, err
+	}
+	if err := p.addManifest(own.Shop, names); err != nil {
+		return nil, err
+	}
+	if err := p.addIndex(parts.Site, own.Shop, names); err != nil {
+		return nil, err
+	}
+	if err := p.addServiceWorker(parts.Site); err != nil {
+		return nil, err
+	}
+	return p, p.compress()
+}
+
+// addHashed adds every file that bears its content's hash in its name, and
+// gives the names by what they are for.
+func (p *Page) addHashed(parts Parts, own shop.Copy) (names, error) {
+	n := names{}
+	for _, name := range []string{"style.css", "boot.js", "worker.js"} {
+		data, err := fs.ReadFile(parts.Site, name)
+		if err != nil {
+			return nil, err
+		}
+		if err := p.add(n, name, data); err != nil {
+			return nil, err
+		}
+	}
+	data, err := shopJSON(own.Shop)
+	if err != nil {
+		return nil, err
+	}
+	made := map[string][]byte{
+		"hillwright.wasm": parts.Program.Wasm,
+		"wasm_exec.js":    parts.Program.Exec,
+		"shop.json":       data,
+		"icon.svg":        iconSVG(),
+	}
+	if own.Logo != nil {
+		made["logo.svg"] = own.Logo
+	}
+	for _, each := range icons {
+		if made[each.name], err = iconPNG(each); err != nil {
+			return nil, err
+		}
+	}
+	for _, name := range sortedNames(made) {
+		if err := p.add(n, name, made[name]); err != nil {
+			return nil, err
+		}
+	}
+	return n, nil
+}
+
+// kindOf gives the media type of a file by its name.
+func kindOf(name string) string {
+	return kinds[name[strings.LastIndexByte(name, '.')+1:]]
+}
+
+var kinds = map[string]string{
+	"html":        "text/html",
+	"css":         "text/css",
+	"js":          "text/javascript",
+	"json":        "application/json",
+	"webmanifest": "application/manifest+json",
+	"svg":         "image/svg+xml",
+	"png":         "image/png",
+	"wasm":        "application/wasm",
+}
