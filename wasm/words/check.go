@@ -99,7 +99,7 @@ func checkTables() []string {
 	}{
 		{"limit", limitNames[:]}, {"limit's meaning", limitMeanings[:]}, {"source", sourceNames},
 		{"note", noteTexts}, {"problem with sections", sectionTexts},
-		{"problem with tracks", trackTexts}, {"look of a file", lookTexts},
+		{"problem with tracks", trackTexts}, {"problem with hills", profileTexts}, {"look of a file", lookTexts},
 	} {
 		for i, k := range t.keys {
 			if k == 0 {

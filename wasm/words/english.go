@@ -190,9 +190,7 @@ var english = [keys]string{
 	StorageFull:    "There is no room left on this device. Nothing was lost; export everything, then forget what is not needed.",
 	StorageLoose:   "The device may clear what is kept here; installing the page, or a file, keeps it safe.",
 
-	ImportSummary: "Read: {0} new, {1} replaced, {2} left out.",
-	ImportWrong:   "{0} is no file that this page wrote. Expected: one made with “export everything”.",
-	ImportNewer:   "{0} was written by a newer version. Take the new version first.",
+	ImportSummary: "Read: {0} new, {1} replaced, {2} unchanged, {3} older than here and left out.",
 
 	ExportDone: "Written: {0}.",
 	Working:    "working …",
@@ -337,6 +335,20 @@ var english = [keys]string{
 	TrackUnreadable:    "the file cannot be read ({0}): choose it again",
 	TrackTooShort:      "all points lie within a few metres; expected is a way of {0} or more",
 	TrackBadOption:     "an option is out of range: {0}",
+
+	FaultTooLarge: "The file is larger than {0} MB. Expected is one made with “export everything”.",
+	FaultNotJSON:  "The file is cut off or damaged at {0} ({1}). Copy it again.",
+	FaultNotOurs:  "No file of saved things. Expected is one made with “export everything”.",
+	FaultNewer:    "The file comes from a newer version. Take the new version first.",
+	FaultLeftOut:  "{0}: left out, since it does not fit ({1}).",
+
+	ProfileAt:         "Hill, edge {0}: {1}.",
+	ProfileTooShort:   "two edges or more are needed",
+	ProfileLengths:    "one height per edge, and one bearing per piece or none, are needed",
+	ProfileNotRising:  "edges begin at 0, and each lies beyond the one before",
+	ProfileNotANumber: "edges, heights and bearings are finite numbers",
+	ProfileTooSteep:   "no road is as steep as the piece from here",
+	ProblemNoRoad:     "The hill has no road: give it at least one stretch.",
 
 	LooksUnknown: "a kind of file that is not known here",
 	LooksFIT:     "a FIT recording",

@@ -191,9 +191,7 @@ var german = [keys]string{
 	StorageFull:    "Der Speicher ist voll. Nichts ging verloren; alles ausgeben, dann Unnötiges vergessen.",
 	StorageLoose:   "Das Gerät darf hier Gespeichertes löschen; sicher ist es, wenn die Seite installiert oder als Datei ausgegeben ist.",
 
-	ImportSummary: "Eingelesen: {0} neu, {1} ersetzt, {2} ausgelassen.",
-	ImportWrong:   "{0} stammt nicht von dieser Seite. Erwartet wird eine Datei aus „alles ausgeben“.",
-	ImportNewer:   "{0} stammt von einer neueren Fassung. Zuerst die neue Fassung übernehmen.",
+	ImportSummary: "Eingelesen: {0} neu, {1} ersetzt, {2} unverändert, {3} älter als hier und ausgelassen.",
 
 	ExportDone: "Ausgegeben: {0}.",
 	Working:    "rechnet …",
@@ -338,6 +336,20 @@ var german = [keys]string{
 	TrackUnreadable:    "die Datei lässt sich nicht lesen ({0}): noch einmal wählen",
 	TrackTooShort:      "alle Punkte liegen wenige Meter beisammen; erwartet wird ein Weg von mindestens {0}",
 	TrackBadOption:     "eine Einstellung liegt außerhalb des Erlaubten: {0}",
+
+	FaultTooLarge: "Die Datei ist größer als {0} MB. Erwartet wird eine aus „alles ausgeben“.",
+	FaultNotJSON:  "Die Datei ist bei {0} abgeschnitten oder beschädigt ({1}). Neu kopieren.",
+	FaultNotOurs:  "Keine Datei mit Gespeichertem. Erwartet wird eine aus „alles ausgeben“.",
+	FaultNewer:    "Die Datei stammt von einer neueren Fassung. Zuerst die neue Fassung übernehmen.",
+	FaultLeftOut:  "{0}: ausgelassen, passt nicht ({1}).",
+
+	ProfileAt:         "Berg, Stützpunkt {0}: {1}.",
+	ProfileTooShort:   "es braucht mindestens zwei Stützpunkte",
+	ProfileLengths:    "es braucht eine Höhe je Stützpunkt und eine Richtung je Stück oder keine",
+	ProfileNotRising:  "Stützpunkte beginnen bei 0, und jeder liegt weiter als der vorige",
+	ProfileNotANumber: "Stützpunkte, Höhen und Richtungen sind endliche Zahlen",
+	ProfileTooSteep:   "so steil wie das Stück von hier an ist keine Straße",
+	ProblemNoRoad:     "Der Berg hat keine Straße: mindestens einen Abschnitt angeben.",
 
 	LooksUnknown: "eine hier unbekannte Datei",
 	LooksFIT:     "eine FIT-Aufzeichnung",

@@ -218,10 +218,9 @@ const (
 	StorageFull
 	StorageLoose
 
-	// ImportSummary: how many things are new, replaced, left out.
+	// ImportSummary: how many things are new, replaced, the same, older than what
+	// is here.
 	ImportSummary
-	ImportWrong
-	ImportNewer
 
 	// ExportDone: file name.
 	ExportDone
@@ -383,6 +382,24 @@ const (
 	TrackUnreadable
 	TrackTooShort
 	TrackBadOption
+
+	// Problems with files of saved things. FaultTooLarge: megabytes. FaultNotJSON,
+	// FaultLeftOut: where, detail.
+	FaultTooLarge
+	FaultNotJSON
+	FaultNotOurs
+	FaultNewer
+	FaultLeftOut
+
+	// Problems with hills made of edges and heights. ProfileAt: edge, what is
+	// wrong.
+	ProfileAt
+	ProfileTooShort
+	ProfileLengths
+	ProfileNotRising
+	ProfileNotANumber
+	ProfileTooSteep
+	ProblemNoRoad
 
 	// What a wrong file looks like.
 	LooksUnknown

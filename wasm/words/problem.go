@@ -8,7 +8,9 @@ import (
 
 	"hillwright/physics/ask"
 	"hillwright/physics/hill"
+	"hillwright/physics/ride"
 	"hillwright/physics/rig"
+	"hillwright/wasm/keep"
 )
 
 // Problem says an error in the reader's words: what, where, what was expected.
@@ -20,6 +22,8 @@ func (v Voice) Problem(err error) string {
 	var input *ask.Problem
 	var section *hill.SectionError
 	var track *hill.TrackError
+	var profile *hill.ProfileError
+	var fault keep.Fault
 	switch {
 	case errors.As(err, &input):
 		return v.inputProblem(input)
@@ -27,6 +31,12 @@ func (v Voice) Problem(err error) string {
 		return v.sectionProblem(section)
 	case errors.As(err, &track):
 		return v.trackProblem(track)
+	case errors.As(err, &profile):
+		return v.Say(ProfileAt, v.Number(float64(profile.Index), 0), v.text(profileTexts[profile.Kind]))
+	case errors.As(err, &fault):
+		return v.fault(fault)
+	case errors.Is(err, ride.ErrNoRoad):
+		return v.text(ProblemNoRoad)
 	case errors.Is(err, rig.ErrLevel):
 		return v.text(ProblemLevel)
 	}
@@ -75,4 +85,26 @@ func (v Voice) expected(in ask.Input) string {
 		return text
 	}
 	return v.Say(ExpectOr, text, v.Choice(in.Path, in.Blank))
+}
+
+// fault says what is wrong with a file of saved things. The detail of a thing
+// that was left out is for whoever wrote the file, and stays in English.
+func (v Voice) fault(f keep.Fault) string {
+	switch f.Kind {
+	case keep.FileTooLarge:
+		return v.Say(FaultTooLarge, f.Detail)
+	case keep.NotJSON:
+		return v.Say(FaultNotJSON, f.Where, f.Detail)
+	case keep.NotOurs:
+		return v.text(FaultNotOurs)
+	case keep.Newer:
+		return v.text(FaultNewer)
+	}
+	return v.Say(FaultLeftOut, f.Where, f.Detail)
+}
+
+// Imported tells what reading a file of saved things did.
+func (v Voice) Imported(m keep.Merged) string {
+	count := func(n int) string { return v.Number(float64(n), 0) }
+	return v.Say(ImportSummary, count(m.Added), count(m.Replaced), count(m.Same), count(m.Older))
 }

@@ -41,6 +41,15 @@ func (v Voice) sectionProblem(e *hill.SectionError) string {
 	return v.Say(SectionAt, v.Number(float64(e.Section), 0), e.Text, what) + " " + example
 }
 
+// profileTexts says what is wrong with a hill of edges and heights.
+var profileTexts = []Key{
+	hill.ProfileTooShort:   ProfileTooShort,
+	hill.ProfileLengths:    ProfileLengths,
+	hill.ProfileNotRising:  ProfileNotRising,
+	hill.ProfileNotANumber: ProfileNotANumber,
+	hill.ProfileTooSteep:   ProfileTooSteep,
+}
+
 // trackTexts says why a file gives no track, lookTexts what it looks like.
 var (
 	trackTexts = []Key{
