@@ -1,0 +1,229 @@
+package main
+
+import (
+	"errors"
+	"flag"
+	"fmt"
+	"io"
+	"io/fs"
+	"math"
+	"os"
+	"strings"
+
+	"hillwright/build/shop"
+	"hillwright/physics/ask"
+	"hillwright/physics/hill"
+	"hillwright/physics/unit"
+	"hillwright/site"
+	"hillwright/wasm/keep"
+	"hillwright/wasm/words"
+)
+
+// askOptions are the command line of `hillwright ask`.
+type askOptions struct {
+	bike, rider, load, day string
+	hill, grade            string
+	shopDir                string
+	lang, units            string
+	sets                   []string
+	json, inputs           bool
+}
+
+// runAsk answers a question in the terminal. It gives the process's exit code:
+// 0 answered (whatever the verdict), 1 it could not, 2 the command line is off.
+func runAsk(args []string, out, errs io.Writer) int {
+	var o askOptions
+	f := flag.NewFlagSet("ask", flag.ContinueOnError)
+	f.SetOutput(errs)
+	f.StringVar(&o.bike, "bike", "", "a bike of the shop, by its `id` (default: the shop's first)")
+	f.StringVar(&o.rider, "rider", "", "a rider of the shop, by its `id` (default: the shop's first)")
+	f.StringVar(&o.load, "load", "", "a load of the shop, by its `id` (default: the shop's first)")
+	f.StringVar(&o.day, "day", "", "a day of the shop, by its `id` (default: the shop's first)")
+	f.StringVar(&o.hill, "hill", "", "a track file, a hill of the shop by its id, or `sections` such as 400m@7%,60m@18% (default: the shop's first hill)")
+	f.StringVar(&o.grade, "grade", "", "a `grade` such as 12% instead of a hill: the steady state")
+	f.StringVar(&o.shopDir, "shop", "", "the `folder` of a shop (default: the demo shop)")
+	f.StringVar(&o.lang, "lang", "en", "language of the answer, `en or de`")
+	f.StringVar(&o.units, "units", "metric", "units of the answer, `metric or imperial`")
+	f.BoolVar(&o.json, "json", false, "answer as JSON, every value with its unit in the key")
+	f.BoolVar(&o.inputs, "inputs", false, "print every input with its value, unit, band and source")
+	f.Func("set", "override an input by its path, `PATH=VALUE`; may be given again", func(s string) error {
+		o.sets = append(o.sets, s)
+		return nil
+	})
+	f.Usage = func() {
+		fmt.Fprint(errs, "usage: hillwright ask [-bike ID] [-rider ID] [-load ID] [-day ID] [-hill FILE.gpx|ID|SECTIONS | -grade 12%] [-set PATH=VALUE …] [-json | -inputs]\n\n")
+		f.PrintDefaults()
+	}
+	if err := f.Parse(args); err != nil {
+		if errors.Is(err, flag.ErrHelp) {
+			return 0
+		}
+		return 2
+	}
+	if f.NArg() > 0 {
+		fmt.Fprintf(errs, "ask: %q is left over: every part of the question has a flag; see `hillwright ask -h`\n", f.Arg(0))
+		return 2
+	}
+	if err := o.answer(out); err != nil {
+		fmt.Fprintf(errs, "ask: %v\n", err)
+		return 1
+	}
+	return 0
+}
+
+func (o *askOptions) answer(out io.Writer) error {
+	voice, err := voiceOf(o.lang, o.units)
+	if err != nil {
+		return err
+	}
+	folder := site.DemoShop()
+	if o.shopDir != "" {
+		folder = os.DirFS(o.shopDir)
+	}
+	copied, err := shop.Read(folder)
+	if err != nil {
+		return err
+	}
+	q, err := o.question(&copied.Shop)
+	if err != nil {
+		return err
+	}
+	switch {
+	case o.inputs:
+		return writeInputs(out, &q, voice)
+	case o.grade != "":
+		return o.steady(out, &q, voice)
+	}
+	return o.climb(out, &q, &copied.Shop, voice)
+}
+
+func voiceOf(lang, units string) (words.Voice, error) {
+	var v words.Voice
+	switch lang {
+	case "en":
+	case "de":
+		v.Lang, v.Comma = words.German, true
+	default:
+		return v, fmt.Errorf("-lang %q is not known; expected en or de", lang)
+	}
+	switch units {
+	case "metric":
+	case "imperial":
+		v.Units = words.Imperial
+	default:
+		return v, fmt.Errorf("-units %q is not known; expected metric or imperial", units)
+	}
+	return v, nil
+}
+
+// question puts the chosen things together and overrides what -set says.
+func (o *askOptions) question(s *keep.Shop) (ask.Question, error) {
+	q := ask.Default()
+	if err := q.Set("ride.law", s.LawID); err != nil {
+		return q, err
+	}
+	for _, choice := range []struct {
+		kind keep.Kind
+		id   string
+	}{{keep.Bike, o.bike}, {keep.Rider, o.rider}, {keep.Load, o.load}, {keep.Day, o.day}} {
+		thing, err := pick(s, choice.kind, choice.id)
+		if err != nil {
+			return q, err
+		}
+		if err := thing.Put(&q); err != nil {
+			return q, fmt.Errorf("%s %s: %w", choice.kind, thing.ID, err)
+		}
+	}
+	for _, set := range o.sets {
+		path, value, ok := strings.Cut(set, "=")
+		if !ok {
+			return q, fmt.Errorf("-set %s: expected PATH=VALUE, such as rider.mass_kg=82", set)
+		}
+		if err := q.Set(strings.TrimSpace(path), value); err != nil {
+			return q, fmt.Errorf("-set %w", err)
+		}
+	}
+	return q, nil
+}
+
+// pick finds a thing of the shop, the first of its kind when id is empty.
+func pick(s *keep.Shop, kind keep.Kind, id string) (keep.Thing, error) {
+	var ids []string
+	for _, t := range s.Things {
+		if t.Kind != kind {
+			continue
+		}
+		if id == "" || t.ID == id {
+			return t, nil
+		}
+		ids = append(ids, t.ID)
+	}
+	return keep.Thing{}, fmt.Errorf("-%s %q: the shop has no such %s; it has %s", kind, id, kind, strings.Join(ids, ", "))
+}
+
+// road finds the hill that -hill means.
+func (o *askOptions) road(s *keep.Shop) (*hill.Profile, error) {
+	var ids []string
+	for _, h := range s.Hills {
+		if o.hill == "" || h.ID == o.hill {
+			return h.Profile(o.lang)
+		}
+		ids = append(ids, h.ID)
+	}
+	if strings.ContainsAny(o.hill, "@%") {
+		p, err := hill.ParseSections(o.hill)
+		return &p, err
+	}
+	file, err := os.Open(o.hill)
+	if errors.Is(err, fs.ErrNotExist) {
+		return nil, fmt.Errorf("-hill %q: no file of that name, no hill of the shop (it has %s), and no sections such as 400m@7%%,60m@18%%", o.hill, strings.Join(ids, ", "))
+	}
+	if err != nil {
+		return nil, err
+	}
+	defer file.Close()
+	track, err := hill.ReadTrack(file, nil)
+	if err != nil {
+		return nil, fmt.Errorf("-hill %s: %w", o.hill, err)
+	}
+	p, err := hill.FromTrack(&track, hill.Options{})
+	if err != nil {
+		return nil, fmt.Errorf("-hill %s: %w", o.hill, err)
+	}
+	return &p, nil
+}
+
+func (o *askOptions) climb(out io.Writer, q *ask.Question, s *keep.Shop, v words.Voice) error {
+	p, err := o.road(s)
+	if err != nil {
+		return err
+	}
+	r, a, err := q.Climb(p)
+	if err != nil {
+		return err
+	}
+	why := v.Why(r, a)
+	if o.json {
+		_, err = out.Write(ask.AnswerJSON(r, a, why))
+		return err
+	}
+	return writeAnswer(out, r, p, a, v)
+}
+
+func (o *askOptions) steady(out io.Writer, q *ask.Question, v words.Voice) error {
+	percent, ok := v.ParseNumber(strings.TrimSuffix(strings.TrimSpace(o.grade), "%"))
+	if !ok || math.Abs(percent) > 60 {
+		return fmt.Errorf("-grade %q: expected a grade from -60%% to 60%%, such as 12%%", o.grade)
+	}
+	g := unit.Percent(percent)
+	r, a, err := q.Steady(g)
+	if err != nil {
+		return err
+	}
+	why := v.WhySteady(r, g, a)
+	if o.json {
+		_, err = out.Write(ask.SteadyJSON(r, g, a, why))
+		return err
+	}
+	return writeSteady(out, r, g, a, v)
+}
