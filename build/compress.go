@@ -19,7 +19,7 @@ func (p *Page) compress() error {
 	var running sync.WaitGroup
 	free := make(chan struct{}, runtime.NumCPU())
 	for i, f := range files {
-		if kindOf(f.Name) == "image/png" {
+		if MediaType(f.Name) == "image/png" {
 			continue
 		}
 		running.Add(1)

@@ -36,14 +36,14 @@ func (p *Page) addManifest(s keep.Shop, n names) error {
 		Name: s.Name, ShortName: s.Name, Lang: s.Languages[0],
 		StartURL: "./", Scope: "./", Display: "standalone",
 		BackgroundColor: paper, ThemeColor: paper,
-		Icons: []manifestIcon{{n["icon.svg"], "any", kindOf("icon.svg"), "any"}},
+		Icons: []manifestIcon{{n["icon.svg"], "any", MediaType("icon.svg"), "any"}},
 	}
 	if len([]rune(m.ShortName)) > mostShort {
 		m.ShortName = "Hillwright"
 	}
 	for _, each := range icons {
 		if each.purpose != "" {
-			m.Icons = append(m.Icons, manifestIcon{n[each.name], each.sizes(), kindOf(each.name), each.purpose})
+			m.Icons = append(m.Icons, manifestIcon{n[each.name], each.sizes(), MediaType(each.name), each.purpose})
 		}
 	}
 	data, err := json.Marshal(m)

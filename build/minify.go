@@ -28,7 +28,7 @@ func minified(name string, data []byte) ([]byte, error) {
 	m.Add("application/manifest+json", &json.Minifier{KeepNumbers: true})
 	m.Add("image/svg+xml", &svg.Minifier{})
 	var out bytes.Buffer
-	err := m.Minify(kindOf(name), &out, bytes.NewReader(data))
+	err := m.Minify(MediaType(name), &out, bytes.NewReader(data))
 	if err == minify.ErrNotExist {
 		return data, nil
 	}

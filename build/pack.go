@@ -12,19 +12,19 @@ import (
 )
 
 // Parts is what a page is made of. Site holds the shell, the styles and the
-// scripts (site.Files); Shop is the shop's folder; Program is what Compile
+// scripts (site.Files); Shop is what shop.Read gave; Program is what Compile
 // gave; Budget is what the page may weigh.
 type Parts struct {
 	Site    fs.FS
-	Shop    fs.FS
+	Shop    shop.Copy
 	Program Program
 	Budget  Budget
 }
 
 // Pack makes the page in the folder out, which is replaced as a whole when it
 // holds an older page, and must be new or empty otherwise. Nothing is written
-// unless everything succeeds. Mistakes in the shop's folder come as
-// shop.Mistakes, a page that is too heavy as *TooHeavy with the report.
+// unless everything succeeds. A page that is too heavy comes as *TooHeavy,
+// with the report.
 func Pack(parts Parts, out string) (*Report, error) {
 	page, err := Assemble(parts)
 	if err != nil {
@@ -39,12 +39,9 @@ func Pack(parts Parts, out string) (*Report, error) {
 
 // Assemble makes the page in memory, compressed siblings included.
 func Assemble(parts Parts) (*Page, error) {
-	own, err := shop.Read(parts.Shop)
-	if err != nil {
-		return nil, err
-	}
+	own := parts.Shop
 	p := &Page{files: map[string]*File{}}
-	names, err := p.addHashed(parts, own)
+	names, err := p.addHashed(parts)
 	if err != nil {
 		return nil, err
 	}
@@ -62,7 +59,7 @@ func Assemble(parts Parts) (*Page, error) {
 
 // addHashed adds every file that bears its content's hash in its name, and
 // gives the names by what they are for.
-func (p *Page) addHashed(parts Parts, own shop.Copy) (names, error) {
+func (p *Page) addHashed(parts Parts) (names, error) {
 	n := names{}
 	for _, name := range []string{"style.css", "boot.js", "worker.js"} {
 		data, err := fs.ReadFile(parts.Site, name)
@@ -73,7 +70,7 @@ func (p *Page) addHashed(parts Parts, own shop.Copy) (names, error) {
 			return nil, err
 		}
 	}
-	data, err := shopJSON(own.Shop)
+	data, err := shopJSON(parts.Shop.Shop)
 	if err != nil {
 		return nil, err
 	}
@@ -83,8 +80,8 @@ func (p *Page) addHashed(parts Parts, own shop.Copy) (names, error) {
 		"shop.json":       data,
 		"icon.svg":        iconSVG(),
 	}
-	if own.Logo != nil {
-		made["logo.svg"] = own.Logo
+	if parts.Shop.Logo != nil {
+		made["logo.svg"] = parts.Shop.Logo
 	}
 	for _, each := range icons {
 		if made[each.name], err = iconPNG(each); err != nil {
@@ -99,12 +96,13 @@ func (p *Page) addHashed(parts Parts, own shop.Copy) (names, error) {
 	return n, nil
 }
 
-// kindOf gives the media type of a file by its name.
-func kindOf(name string) string {
-	return kinds[name[strings.LastIndexByte(name, '.')+1:]]
+// MediaType gives a file's media type by the ending of its name, empty when a
+// page has no such files.
+func MediaType(name string) string {
+	return mediaTypes[name[strings.LastIndexByte(name, '.')+1:]]
 }
 
-var kinds = map[string]string{
+var mediaTypes = map[string]string{
 	"html":        "text/html",
 	"css":         "text/css",
 	"js":          "text/javascript",
