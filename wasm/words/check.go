@@ -38,6 +38,9 @@ func checkTexts(all []*[keys]string) []string {
 			if want, got := blanksOf(all[0][k]), blanksOf(text); want != got && all[0][k] != "" {
 				faults = append(faults, where+" has the blanks "+got+" where "+tags[0]+" has "+want)
 			}
+			if has := blanksOf(text); !strings.HasPrefix("{0}{1}{2}{3}{4}{5}{6}{7}{8}{9}", has) && has != none {
+				faults = append(faults, where+" has the blanks "+has+"; they are counted from {0} without a gap")
+			}
 			if bare := plain(text); strings.ContainsAny(bare, "{}") {
 				faults = append(faults, where+" has a brace that is no blank; blanks are {0} to {9}")
 			}
@@ -61,6 +64,8 @@ func label(all []*[keys]string, k Key) string {
 	return text
 }
 
+const none = "none"
+
 func blanksOf(text string) string {
 	var has [10]bool
 	for _, p := range cut(text) {
@@ -75,7 +80,7 @@ func blanksOf(text string) string {
 		}
 	}
 	if out == "" {
-		return "none"
+		return none
 	}
 	return out
 }

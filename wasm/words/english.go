@@ -13,7 +13,7 @@ var english = [keys]string{
 	AskRider:        "{0}, {1}, pedalling {2}",
 	AskLoad:         "{0}, {1}",
 	AskDay:          "{0}, {1}",
-	AskRide:         "{0}, from {1} at the foot; law: {2}.",
+	AskRide:         "{0}, {1} at the foot; law: {2}.",
 	AskLevel:        "assist level {0}",
 	AskLevelOff:     "motor off",
 	AskLevelHighest: "highest assist level",
@@ -379,6 +379,8 @@ var english = [keys]string{
 	WhyWhole:       "the whole way, {0} at {1},",
 	WhyWholeUpTo:   "the whole way, {0} at {1} (up to {2}),",
 
+	WhyFoot: "the foot",
+
 	WhyClears: "{0} wants {1}, and {2} allows {3}: {4} in hand.",
 	WhyTight:  "{0} wants {1}, and {2} allows {3}: only {4} in hand.",
 
@@ -400,7 +402,9 @@ var english = [keys]string{
 
 	SteadyAt: "a grade of {0}",
 
-	SteadyHolds:    "It holds up to {0}.",
-	SteadySpeed:    "It settles at {0}; {1} sets that speed, and up to {2} holds.",
-	SteadySpeedToo: "It settles at {0}; the same limit sets that speed, and up to {2} holds.",
+	SteadyHolds: "It holds up to {0}.",
+
+	SteadyDown:     "A grade of {0} wants no pull: it rolls at {1}.",
+	SteadySpeed:    "It settles at {0}; {1} sets that speed, and it holds up to {2}.",
+	SteadySpeedToo: "It settles at {0}; the same limit sets that speed, and it holds up to {1}.",
 }

@@ -380,6 +380,8 @@ var german = [keys]string{
 	WhyWhole:       "auf dem ganzen Weg, {0} mit {1},",
 	WhyWholeUpTo:   "auf dem ganzen Weg, {0} mit {1} (bis {2}),",
 
+	WhyFoot: "dem Fuß",
+
 	WhyClears: "{0} braucht es {1}, und {2} erlaubt {3}: {4} Reserve.",
 	WhyTight:  "{0} braucht es {1}, und {2} erlaubt {3}: nur {4} Reserve.",
 
@@ -395,13 +397,15 @@ var german = [keys]string{
 
 	WhySpeed:    "Das Tempo dort, mindestens {0}, bestimmt {1}.",
 	WhySpeedToo: "Das Tempo dort, mindestens {0}, bestimmt dieselbe Grenze.",
-	WhySlowest:  "An der langsamsten Stelle sind es {0}; die Zugkraft bestimmt dort {1}.",
+	WhySlowest:  "An der langsamsten Stelle sind es {0}; dort bestimmt {1} die Zugkraft.",
 
 	WhyDown: "Hier geht es nirgends hinauf: zu ziehen gibt es nichts. An der langsamsten Stelle sind es {0}.",
 
 	SteadyAt: "bei {0} Steigung",
 
-	SteadyHolds:    "Bis {0} hält es.",
-	SteadySpeed:    "Es stellen sich {0} ein, die Grenze dafür ist {1}; bis {2} hält es.",
-	SteadySpeedToo: "Es stellen sich {0} ein, durch dieselbe Grenze; bis {2} hält es.",
+	SteadyHolds: "Zu halten sind bis zu {0}.",
+
+	SteadyDown:     "Bei {0} Steigung braucht es keine Zugkraft: es rollt mit {1}.",
+	SteadySpeed:    "Es stellen sich {0} ein, die Grenze dafür ist {1}; zu halten sind bis zu {2}.",
+	SteadySpeedToo: "Es stellen sich {0} ein, durch dieselbe Grenze; zu halten sind bis zu {1}.",
 }

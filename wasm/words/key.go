@@ -435,6 +435,9 @@ const (
 	WhyWhole
 	WhyWholeUpTo
 
+	// WhyFoot stands for the place where a stretch begins.
+	WhyFoot
+
 	// WhyClears, WhyTight: stretch, wanted pull, what binds, its pull, headroom in
 	// per cent.
 	WhyClears
@@ -468,6 +471,9 @@ const (
 
 	// SteadyHolds: steepest grade held. SteadySpeed: speed, what sets it.
 	SteadyHolds
+
+	// SteadyDown: grade, speed.
+	SteadyDown
 	SteadySpeed
 	SteadySpeedToo
 

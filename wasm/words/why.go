@@ -17,7 +17,7 @@ const level = 0.003
 // where it stops or what sets the speed. All of it comes from the answer.
 func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 	b := &a.Balance
-	if !a.Stalled && (b.WantedN <= 0 || b.Grade < level && a.Hardest.SteepestGrade < level) {
+	if a.Verdict == ride.Clears && (b.WantedN <= 0 || b.Grade < level && a.Hardest.SteepestGrade < level) {
 		return v.Say(WhyDown, v.Speed(a.Hardest.Running.SpeedMps))
 	}
 	first := v.weigh(r, b, v.where(a), a.Verdict)
@@ -37,6 +37,10 @@ func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 func (v Voice) where(a *ride.Answer) string {
 	h := &a.Hardest
 	length, mean, steepest := v.Length(h.ToM-h.FromM), v.Grade(h.Grade), v.Grade(h.SteepestGrade)
+	from := v.text(WhyFoot)
+	if h.FromM > 0 {
+		from = v.Length(h.FromM)
+	}
 	whole := h.FromM <= 0 && h.ToM >= a.LengthM
 	switch {
 	case whole && mean == steepest:
@@ -44,9 +48,9 @@ func (v Voice) where(a *ride.Answer) string {
 	case whole:
 		return v.Say(WhyWholeUpTo, length, mean, steepest)
 	case mean == steepest:
-		return v.Say(WhyStretch, length, mean, v.Length(h.FromM))
+		return v.Say(WhyStretch, length, mean, from)
 	}
-	return v.Say(WhyStretchUpTo, length, mean, v.Length(h.FromM), steepest)
+	return v.Say(WhyStretchUpTo, length, mean, from, steepest)
 }
 
 // weigh is the sentence of the balance at a place.
@@ -92,6 +96,9 @@ func (v Voice) speed(r *rig.Rig, b *ride.Balance, run *ride.Running) string {
 // WhySteady says the same of one grade that goes on for ever.
 func (v Voice) WhySteady(r *rig.Rig, g unit.Grade, a *ride.SteadyAnswer) string {
 	b := &a.Balance
+	if a.Held && b.WantedN <= 0 {
+		return v.Say(SteadyDown, v.Grade(g), v.Speed(a.Running.SpeedMps))
+	}
 	verdict := a.Verdict
 	if !a.Held {
 		verdict = ride.Short
