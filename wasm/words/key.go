@@ -235,6 +235,44 @@ const (
 	BrokeGoOn
 	BrokeDetail
 
+	// ChangesGone: name.
+	ChangesGone
+	ButtonFigures
+	ButtonShare
+	StaffBack
+	StaffOn
+	WeightBackToHill
+	SameInFigures
+
+	// NoteThere: speed, gear, cadence.
+	NoteThere
+
+	// NoteBinds: limit, headroom.
+	NoteBinds
+
+	// NoteNext: limit, headroom.
+	NoteNext
+
+	// NoteWhole: length, ascent, time.
+	NoteWhole
+
+	// NoteUntil: where, time.
+	NoteUntil
+
+	// NoteShares: rider's energy, motor's energy, motor's part.
+	NoteShares
+
+	// NotePack: energy, part of the pack.
+	NotePack
+
+	// NoteHolds: steepest grade held.
+	NoteHolds
+
+	// NoteBand: lowest, highest.
+	NoteBand
+	FaultsIn
+	SectionsUse
+
 	// Cautions.
 	CautionDescent
 	CautionBrakes
