@@ -19,7 +19,7 @@ const (
 	rowHeight   = 17.0
 	fanLeast    = 12.0
 	pegTall     = 20.0
-	barrelTall  = 38.0
+	barrelTall  = 40.0
 	gapBelow    = 12.0 // gap line below the barrel
 	cordTall    = 28.0
 	bodyTall    = 42.0
@@ -160,8 +160,8 @@ func (c *balance) scale() dom.Parts {
 	if c.voice.Units == words.Imperial {
 		in = newtonsPerPound
 	}
-	steps := int((c.size.W - 2*balanceSide) / 58)
-	step := in * tidyStep(c.mostN/in, max(2, steps))
+	steps := clampTo((c.size.W-2*balanceSide)/58, 2, 6)
+	step := in * tidyStep(c.mostN/in, int(steps))
 	top := c.barrel + 17
 	var ticks path
 	var parts dom.Parts
@@ -174,7 +174,7 @@ func (c *balance) scale() dom.Parts {
 			continue
 		}
 		ticks.upTo(top + 6)
-		l := label{lines: []string{c.voice.Pull(float64(i/5) * step)}, x: x, y: c.barrel + 34, px: smallPx, anchor: fromMiddle, class: "quiet"}
+		l := label{lines: []string{c.voice.Pull(float64(i/5) * step)}, x: x, y: c.barrel + 34.5, px: smallPx, anchor: fromMiddle, class: "quiet"}
 		l = l.clamp(balanceSide-13, c.size.W-balanceSide+13)
 		if b := l.box(); b.grown(3).free(taken) {
 			taken = append(taken, b)

@@ -36,7 +36,7 @@
 //	weight, weight-body, cord   the weight: group (focusable: give it a focus ring), body (filled with ink), cord
 //	gap, gap-short     the dimension line between weight and first peg; gap-short where pull is missing (accent)
 //	gear-curve, gear-used, envelope, load   pull by gear (thin), of the gear in use (medium), best pull (bold), road load (dashed)
-//	by-mark            where another limit begins to decide (stroked)
+//	grid, drop         lines across at the pulls (faint); from the crossing down to the speed (thin)
 //	crossing           the point where the speed settles (filled, accent)
 //	figures            tables of the text equivalents
 //	hatch-key          the legend's list; swatch the small svg in it

@@ -61,6 +61,14 @@ func (s *section) stretches() []stretch {
 			least[k] = math.Min(least[k], t.Headroom[i])
 		}
 	}
+	if h := &s.answer.Hardest; s.answer.Stalled && len(s.answer.Balance.Pegs) > 0 {
+		// The hardest stretch is weighed even where the rig does not reach it.
+		for k := int(s.x(h.FromM) - s.start); k < int(math.Ceil(s.x(h.ToM)-s.start)); k++ {
+			if k >= 0 && k < n && math.IsInf(least[k], 1) {
+				least[k] = s.answer.Balance.Headroom()
+			}
+		}
+	}
 	var out []stretch
 	for k, h := range least {
 		as := hatchBeyond

@@ -2,6 +2,7 @@ package draw
 
 import (
 	"math"
+	"strings"
 	"unicode"
 
 	"hillwright/wasm/dom"
@@ -78,8 +79,14 @@ func (l label) width() float64 {
 	for _, s := range l.lines {
 		w = math.Max(w, textWidth(s, l.px))
 	}
+	if strings.HasPrefix(l.class, "figure") {
+		w *= bolder
+	}
 	return w
 }
+
+// bolder is how much wider bold type runs.
+const bolder = 1.12
 
 func (l label) height() float64 { return float64(len(l.lines)) * l.px * lineGap }
 

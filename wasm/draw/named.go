@@ -65,26 +65,34 @@ func (d *diagram) names(taken []box) dom.Parts {
 	return append(dom.Parts{marks.node("leader")}, parts...)
 }
 
-// beside places words above the best pull near a run, as near as it goes; at is
-// the point on the line that they name.
+// beside places words above the best pull near a run.
 func (d *diagram) beside(l label, r run, taken []box) (placed label, at point, ok bool) {
-	w, h := l.width(), l.height()
-	least := math.Inf(1)
+	var of []point
 	for _, part := range []float64{0.5, 0.35, 0.65, 0.2, 0.8} {
 		s := d.best[r.from+int(part*float64(r.last-r.from))]
-		x, y := d.x(s.mps), d.y(s.pullN)
-		for _, aside := range []float64{2, -w / 3, -w * 2 / 3} {
-			left := clampTo(x+aside, d.plot.x0+4, d.size.W-2-w)
+		of = append(of, point{d.x(s.mps), d.y(s.pullN)})
+	}
+	return d.above(l, of, taken)
+}
+
+// above places words above the best pull, as near to one of some points as it
+// goes; at is that point.
+func (d *diagram) above(l label, of []point, taken []box) (placed label, at point, ok bool) {
+	w, h := l.width(), l.height()
+	least := math.Inf(1)
+	for _, p := range of {
+		for _, aside := range []float64{2, 8, -w / 3, -w * 2 / 3, 24, 40} {
+			left := clampTo(p.x+aside, d.plot.x0+4, d.size.W-2-w)
 			roof := d.roof(left, left+w)
-			for lift := 7.0; lift < 120; lift += 3 {
-				try := l.at(left, math.Min(y, roof)-lift-h)
+			for lift := 7.0; lift < 160; lift += 3 {
+				try := l.at(left, math.Min(p.y, roof)-lift-h)
 				b := try.box()
-				far := math.Abs(clampTo(x, b.x0, b.x1)-x) + y - b.y1
+				far := math.Abs(clampTo(p.x, b.x0, b.x1)-p.x) + p.y - b.y1
 				if b.y0 < 1 || far >= least {
 					break
 				}
 				if b.grown(2).free(taken) {
-					placed, at, least = try, point{x, y}, far
+					placed, at, least = try, p, far
 					break
 				}
 			}

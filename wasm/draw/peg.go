@@ -20,7 +20,7 @@ type flag struct {
 // slotGap is how far apart the poles of flags stand at least [px].
 const slotGap = 7.0
 
-func (f flag) right() float64 { return f.slot + 4 + textWidth(f.text, smallPx) }
+func (f flag) right() float64 { return f.slot + 4 + bolder*textWidth(f.text, smallPx) }
 
 // layFlags gives every peg a slot and a row. Slots keep the pegs' order and
 // leave their labels room at the right, so leaders do not cross. Going from

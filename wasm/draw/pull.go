@@ -104,7 +104,7 @@ func (d *diagram) loadAt(mps float64) float64 {
 func PullDiagram(r *rig.Rig, g unit.Grade, running ride.Running, size Size, v words.Voice) *dom.Node {
 	d := newDiagram(r, g, running, size, v)
 	axes, taken := d.axes()
-	crossing, taken := d.crossing(taken)
+	crossing, taken := d.crossing(append(taken, d.loadBoxes()...))
 	return picture("img", "pull", v.Say(words.PullTitle), d.summary(v), size,
 		axes, d.gears(), d.load(), d.envelope(), crossing, d.names(taken))
 }
@@ -145,7 +145,7 @@ func (d *diagram) axes() (dom.Parts, []box) {
 	}
 	add(label{lines: []string{d.voice.Say(words.AxisPull) + ", " + pullName}, x: 2, y: 12, px: smallPx, class: "words"})
 	add(label{lines: []string{d.voice.Say(words.AxisSpeed) + ", " + speedName}, x: d.plot.x1, y: d.size.H - 4, px: smallPx, anchor: fromEnd, class: "words"})
-	return append(dom.Parts{across.node("ordinate"), lines.node("base")}, parts...), taken
+	return append(dom.Parts{across.node("grid"), lines.node("base")}, parts...), taken
 }
 
 // gears are the pulls by gear, the gear in use drawn stronger.
@@ -202,30 +202,39 @@ func (d *diagram) load() *dom.Node {
 	return line.node("load")
 }
 
+// loadBoxes is the room that the load's line takes.
+func (d *diagram) loadBoxes() []box {
+	var out []box
+	for _, s := range d.best {
+		if n := d.loadAt(s.mps); n >= 0 && n <= d.mostN {
+			x, y := d.x(s.mps), d.y(n)
+			out = append(out, box{x - samplePx/2, y - 2, x + samplePx/2, y + 2})
+		}
+	}
+	return out
+}
+
 // crossing is the point where the speed settles, with speed and gear.
 func (d *diagram) crossing(taken []box) (dom.Parts, []box) {
-	run := &d.running
-	pull := run.RiderN + run.MotorN
-	if run.SpeedMps <= 0 || pull < 0 || pull > d.mostN {
+	r := &d.running
+	pull := r.RiderN + r.MotorN
+	if r.SpeedMps <= 0 || pull < 0 || pull > d.mostN {
 		return nil, taken
 	}
-	x, y := d.x(run.SpeedMps), d.y(pull)
+	x, y := d.x(r.SpeedMps), d.y(pull)
 	var dot, down path
 	dot.disc(x, y, 5)
 	down.move(x, y)
 	down.upTo(d.plot.y1)
+	taken = append(taken, box{x - 6, y - 6, x + 6, y + 6})
 	l := label{
-		lines: []string{d.voice.Speed(run.SpeedMps), d.voice.Gear(d.rig, run.Gear)},
+		lines: []string{d.voice.Speed(r.SpeedMps), d.voice.Gear(d.rig, r.Gear)},
 		px:    wordsPx, class: "figure halo",
 	}
-	left, top := x+8, y+8
-	if left+l.width() > d.size.W-4 {
-		left = x - 8 - l.width()
+	parts := dom.Parts{down.node("drop"), dot.node("crossing")}
+	if l, _, ok := d.above(l, []point{{x, y}}, taken); ok {
+		taken = append(taken, l.box())
+		parts = append(parts, l.node())
 	}
-	if top+l.height() > d.plot.y1-2 {
-		top = math.Max(2, y-8-l.height())
-	}
-	l = l.at(left, top)
-	taken = append(taken, l.box(), box{x - 6, y - 6, x + 6, y + 6})
-	return dom.Parts{down.node("by-mark"), dot.node("crossing"), l.node()}, taken
+	return parts, taken
 }
