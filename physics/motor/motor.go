@@ -31,6 +31,7 @@ func (k Kind) String() string { return kinds[k] }
 // the assist factors, motor power per rider power, level 1 first. CadenceHigh
 // is the crank cadence above which a crank motor eases off [turns/min].
 // Efficiency is the share of the pack's energy that leaves the output.
+// DirectDrive tells of a hub motor that it has neither gears nor freewheel.
 type Motor struct {
 	Kind        Kind
 	TorqueNm    float64
@@ -38,6 +39,7 @@ type Motor struct {
 	Levels      []float64
 	CadenceHigh float64
 	Efficiency  float64
+	DirectDrive bool
 }
 
 // easeOut is the span above CadenceHigh, as a part of it, in which a crank
