@@ -383,7 +383,7 @@ var english = [keys]string{
 	LooksJSON:    "JSON without a line in it",
 	LooksText:    "plain text",
 
-	WhatTorque:     "the motor's torque in {0}",
+	WhatTorque:     "the motor's torque in gear {0}",
 	WhatTorqueHub:  "the hub motor's torque at its wheel",
 	WhatPower:      "the motor's power",
 	WhatRider:      "the rider's effort with assist level {0}",
@@ -408,8 +408,10 @@ var english = [keys]string{
 
 	WhyUnheld: "{0} wants {1}.",
 
-	WhyStops:   "It stops at {0}.",
-	WhyGivesUp: "It becomes too slow there to keep its balance.",
+	WhyStops:       "It stops at {0}.",
+	WhyStopsBefore: "It stops even before that, at {0}.",
+	WhyStopsAtFoot: "It does not get away from the foot.",
+	WhyGivesUp:     "It becomes too slow there to keep its balance.",
 
 	WhyStopsThough: "It stops at {0} all the same: it became too slow to keep its balance.",
 
@@ -417,7 +419,9 @@ var english = [keys]string{
 	WhySpeedToo: "At its slowest there it rides {0}; the same limit sets that speed.",
 	WhySlowest:  "At its slowest there it rides {0}, where {1} sets the pull.",
 
-	WhyDown: "Nothing here climbs: the road never has to be pulled up. It rides {0} where it is slowest.",
+	WhyDown: "Nothing here climbs: {0} of pull is the most it wants. At its slowest there it rides {1}.",
+
+	WhyAllDown: "Nothing here climbs, and no pull is wanted. At its slowest there it rides {0}.",
 
 	SteadyAt: "a grade of {0}",
 

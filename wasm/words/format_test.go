@@ -160,6 +160,7 @@ func TestParseNumber(t *testing.T) {
 		{"12 34", 0, false},
 		{"1234 567", 0, false},
 		{"1.2.3", 0, false},
+		{"1.234.567", 0, false},
 		{"1.5,2", 0, false},
 		{"1-2", 0, false},
 		{"--1", 0, false},

@@ -103,7 +103,7 @@ var german = [keys]string{
 	HatchClose:   "etwas Reserve",
 	HatchSolid:   "wenig oder keine Reserve",
 	BalanceTitle: "Die Waage",
-	BalanceHelp:  "Das Gewicht ist die nötige Zugkraft. Jeder Stift ist eine Grenze, bei der Zugkraft, die sie zulässt. Der erste Stift nach dem Gewicht hält.",
+	BalanceHelp:  "Das Gewicht ist die nötige Zugkraft. Jeder Stift ist eine Grenze, bei der Zugkraft, die sie zulässt. Der erste Stift jenseits des Gewichts ist die Grenze.",
 
 	BalanceText: "{0} nötig bei {1} Steigung, gewogen bei {2}.",
 
@@ -409,8 +409,10 @@ var german = [keys]string{
 
 	WhyUnheld: "{0} braucht es {1}.",
 
-	WhyStops:   "Bei {0} bleibt es stehen.",
-	WhyGivesUp: "Dort wird es zu langsam, um die Balance zu halten.",
+	WhyStops:       "Bei {0} bleibt es stehen.",
+	WhyStopsBefore: "Es bleibt schon davor stehen, bei {0}.",
+	WhyStopsAtFoot: "Es kommt unten nicht vom Fleck.",
+	WhyGivesUp:     "Dort wird es zu langsam, um die Balance zu halten.",
 
 	WhyStopsThough: "Bei {0} bleibt es trotzdem stehen: zu langsam für die Balance.",
 
@@ -418,7 +420,9 @@ var german = [keys]string{
 	WhySpeedToo: "Das Tempo dort, mindestens {0}, bestimmt dieselbe Grenze.",
 	WhySlowest:  "An der langsamsten Stelle sind es {0}; dort bestimmt {1} die Zugkraft.",
 
-	WhyDown: "Hier geht es nirgends hinauf: zu ziehen gibt es nichts. An der langsamsten Stelle sind es {0}.",
+	WhyDown: "Hier geht es nirgends hinauf: mehr als {0} Zugkraft braucht es nicht. An der langsamsten Stelle sind es {1}.",
+
+	WhyAllDown: "Hier geht es nirgends hinauf, und es braucht keine Zugkraft. An der langsamsten Stelle sind es {0}.",
 
 	SteadyAt: "bei {0} Steigung",
 

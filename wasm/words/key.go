@@ -491,6 +491,8 @@ const (
 
 	// WhyStops: where.
 	WhyStops
+	WhyStopsBefore
+	WhyStopsAtFoot
 	WhyGivesUp
 
 	// WhyStopsThough: where, though there was pull for the hardest place.
@@ -501,8 +503,11 @@ const (
 	WhySpeedToo
 	WhySlowest
 
-	// WhyDown: the hill does not climb anywhere: wanted pull, speed.
+	// WhyDown: the hill does not climb anywhere: most pull wanted, speed.
 	WhyDown
+
+	// WhyAllDown: it wants no pull anywhere: speed.
+	WhyAllDown
 
 	// Steady: grade.
 	SteadyAt

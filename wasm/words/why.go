@@ -17,19 +17,38 @@ const level = 0.003
 // where it stops or what sets the speed. All of it comes from the answer.
 func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 	b := &a.Balance
-	if a.Verdict == ride.Clears && (b.WantedN <= 0 || b.Grade < level && a.Hardest.SteepestGrade < level) {
-		return v.Say(WhyDown, v.Speed(a.Hardest.Running.SpeedMps))
+	switch slowest := v.Speed(a.Hardest.Running.SpeedMps); {
+	case a.Verdict != ride.Clears:
+	case b.WantedN <= 0:
+		return v.Say(WhyAllDown, slowest)
+	case b.Grade < level && a.Hardest.SteepestGrade < level:
+		return v.Say(WhyDown, v.Pull(b.WantedN), slowest)
 	}
 	first := v.weigh(r, b, v.where(a), a.Verdict)
 	switch {
-	case a.Stalled && b.Headroom() > 0:
-		return first + " " + v.Say(WhyStopsThough, v.Length(a.StalledAtM))
 	case a.Stalled:
-		return first + " " + v.Say(WhyStops, v.Length(a.StalledAtM))
+		return first + " " + v.stops(a)
 	case a.Verdict == ride.Short:
 		return first + " " + v.Say(WhyGivesUp)
 	}
 	return first + " " + v.speed(r, b, &a.Hardest.Running)
+}
+
+// atFoot is how far from the foot a rig that stops has not got away [m].
+const atFoot = 1.0
+
+// stops tells where it stops, seen from the hardest stretch.
+func (v Voice) stops(a *ride.Answer) string {
+	at := v.Length(a.StalledAtM)
+	switch {
+	case a.StalledAtM < atFoot:
+		return v.text(WhyStopsAtFoot)
+	case a.StalledAtM < a.Hardest.FromM:
+		return v.Say(WhyStopsBefore, at)
+	case a.Balance.Headroom() > 0:
+		return v.Say(WhyStopsThough, at)
+	}
+	return v.Say(WhyStops, at)
 }
 
 // where names the hardest stretch: its length, its grade, its steepest piece

@@ -103,6 +103,12 @@ func whyCases(t *testing.T) []say {
 	a = answerOf(ride.Short, rig.Torque, rig.Power, 0.36)
 	add("stalled though the pull is there", crank, a)
 	a = answerOf(ride.Short, rig.Torque, rig.Power, -0.1)
+	a.StalledAtM = 73
+	add("stalled before the hardest stretch", crank, a)
+	a = answerOf(ride.Short, rig.Torque, rig.Power, -0.1)
+	a.StalledAtM = 0.3
+	add("stalled at the foot", crank, a)
+	a = answerOf(ride.Short, rig.Torque, rig.Power, -0.1)
 	a.Stalled = false
 	add("short, not stalled", crank, a)
 	a = answerOf(ride.Clears, rig.Torque, rig.Power, 0)
@@ -111,6 +117,9 @@ func whyCases(t *testing.T) []say {
 	a = answerOf(ride.Clears, rig.Torque, rig.Coasting, 1)
 	a.Balance.Grade, a.Hardest.SteepestGrade, a.Balance.WantedN = -0.05, -0.05, -40
 	add("only down", crank, a)
+	a = answerOf(ride.Clears, rig.Torque, rig.CutOff, 0.95)
+	a.Balance.Grade, a.Hardest.SteepestGrade, a.Balance.WantedN = 0, 0, 11
+	add("level", crank, a)
 
 	steady := func(name string, r *rig.Rig, held bool, binds, sets rig.Limit, headroom float64) {
 		from := answerOf(ride.Clears, binds, sets, headroom)

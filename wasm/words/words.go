@@ -71,12 +71,8 @@ func (v Voice) text(k Key) string {
 // Say gives a text of the catalogue with its blanks {0}, {1} ... filled. A
 // blank without an argument stays empty.
 func (v Voice) Say(k Key, args ...string) string {
-	pieces := cut(v.text(k))
-	if len(pieces) == 1 && pieces[0].Blank < 0 {
-		return pieces[0].Text
-	}
 	var b strings.Builder
-	for _, p := range pieces {
+	for _, p := range cut(v.text(k)) {
 		switch {
 		case p.Blank < 0:
 			b.WriteString(p.Text)
