@@ -28,7 +28,7 @@ func anyThings() *rapid.Generator[Things] {
 				last := len(h.EdgeM) - 1
 				d := rapid.Float64Range(1, 500).Draw(t, "length")
 				h.EdgeM = append(h.EdgeM, h.EdgeM[last]+d)
-				h.HeightM = append(h.HeightM, h.HeightM[last]+rapid.Float64Range(-0.5, 0.5).Draw(t, "sine")*d)
+				h.HeightM = append(h.HeightM, h.HeightM[last]+rapid.Float64Range(-0.9, 0.9).Draw(t, "sine")*d)
 				h.BearingDeg = append(h.BearingDeg, rapid.Float64Range(0, 360).Draw(t, "bearing"))
 			}
 			out.Hills = append(out.Hills, h)
@@ -98,7 +98,7 @@ func TestDecodeFaults(t *testing.T) {
 		{"unknown value", head + `"things":[{"kind":"bike","id":"x","names":{"":"X"},"values":{"horn":"1"}}]}`, BadValue, "bike.horn", 1},
 		{"unknown source", head + `"things":[{"kind":"bike","id":"x","names":{"":"X"},"sources":{"mass_kg":"guess"}}]}`, BadValue, "mass_kg", 1},
 		{"one edge", head + `"hills":[{"id":"h","names":{"":"H"},"edge_m":[0],"height_m":[0]}]}`, BadHill, "edge_m", 0},
-		{"falls back", head + `"hills":[{"id":"h","names":{"":"H"},"edge_m":[0,5,4],"height_m":[0,1,1]}]}`, BadHill, "rise", 0},
+		{"falls back", head + `"hills":[{"id":"h","names":{"":"H"},"edge_m":[0,5,4],"height_m":[0,1,1]}]}`, BadHill, "edge", 0},
 		{"no number", head + `"hills":[{"id":"h","names":{"":"H"},"edge_m":[0,5],"height_m":[0,null]}]}`, BadHill, "height_m", 0},
 		{"a wall", head + `"hills":[{"id":"h","names":{"":"H"},"edge_m":[0,5],"height_m":[0,5]}]}`, BadHill, "length", 0},
 		{"deep", strings.Repeat("[", 100000), NotJSON, "nested", 0},

@@ -4,7 +4,6 @@ import (
 	"math"
 
 	"hillwright/physics/hill"
-	"hillwright/physics/unit"
 )
 
 // Name gives a thing's name in a language, or else its name for the rest, or
@@ -32,15 +31,13 @@ func (h *Hill) Profile(lang string) (*hill.Profile, error) {
 	if wrong := h.wrong(); wrong != "" {
 		return nil, Fault{BadHill, h.Name(lang), wrong}
 	}
-	p := &hill.Profile{ID: h.ID, Name: h.Name(lang), EdgeM: h.EdgeM, HeightM: h.HeightM, HeightKnown: h.HeightKnown}
-	for i := 1; i < len(h.EdgeM); i++ {
-		road, rise := h.EdgeM[i]-h.EdgeM[i-1], h.HeightM[i]-h.HeightM[i-1]
-		p.Grade = append(p.Grade, unit.Grade(rise/math.Sqrt(road*road-rise*rise)))
-	}
+	var bearings []float64
 	for _, deg := range h.BearingDeg {
-		p.BearingRad = append(p.BearingRad, deg*math.Pi/180)
+		bearings = append(bearings, deg*math.Pi/180)
 	}
-	return p, nil
+	p, err := hill.FromHeights(h.EdgeM, h.HeightM, bearings)
+	p.ID, p.Name, p.HeightKnown = h.ID, h.Name(lang), h.HeightKnown
+	return &p, err
 }
 
 // HillOf makes a profile one to be stored, under an id and a name.

@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"hillwright/physics/ask"
+	"hillwright/physics/hill"
 )
 
 // FaultKind is what is wrong with a file or with a thing in it.
@@ -123,30 +124,9 @@ func (r *reader) hills(v any) []Hill {
 
 // wrong tells why a hill is none, or "".
 func (h *Hill) wrong() string {
-	n := len(h.EdgeM)
-	switch {
-	case n < 2:
-		return "edge_m: expected at least two distances"
-	case len(h.HeightM) != n:
-		return "height_m: expected as many heights as edges"
-	case len(h.BearingDeg) != 0 && len(h.BearingDeg) != n-1:
-		return "bearing_deg: expected one bearing for each piece, or none"
-	case h.EdgeM[0] != 0:
-		return "edge_m: expected to begin with 0"
-	}
-	for i, y := range h.HeightM {
+	for _, y := range h.HeightM {
 		if !(y >= -500 && y <= 9000) {
 			return "height_m: expected -500 to 9000"
-		}
-		if i == 0 {
-			continue
-		}
-		d := h.EdgeM[i] - h.EdgeM[i-1]
-		if !(d > 0) || !(h.EdgeM[i] <= 1e7) {
-			return "edge_m: expected distances that rise, up to 10000 km"
-		}
-		if math.Abs(y-h.HeightM[i-1]) >= d {
-			return "height_m: expected no piece to rise more than its length"
 		}
 	}
 	for _, b := range h.BearingDeg {
@@ -154,8 +134,17 @@ func (h *Hill) wrong() string {
 			return "bearing_deg: expected degrees from north"
 		}
 	}
+	if n := len(h.EdgeM); n > 0 && !(h.EdgeM[n-1] <= longestM) {
+		return "edge_m: expected at most 10000 km"
+	}
+	if _, err := hill.FromHeights(h.EdgeM, h.HeightM, h.BearingDeg); err != nil {
+		return "edge_m and height_m: " + err.Error()
+	}
 	return ""
 }
+
+// longestM is the length of the longest hill that is kept [m].
+const longestM = 1e7
 
 func text(v any) string { s, _ := v.(string); return s }
 

@@ -1,19 +1,21 @@
 package keep
 
 // Settings is how a person left the page, so that a reload finds it again:
-// what they like (Lang, Units, Theme, each empty when the device decides),
-// what is chosen by kind ("bike", "hill"), and the inputs that were changed
-// since, with their sources, by whole path.
+// what they like (Lang, Units, Mark, Theme, each empty when the device
+// decides), what is chosen by kind ("bike", "hill"), the inputs that were
+// changed since, with their sources, by whole path, and the sections as typed.
 type Settings struct {
-	Lang, Units, Theme string
-	Chosen             map[string]string
-	Values, Sources    map[string]string
+	Lang, Units, Mark, Theme string
+	Sections                 string
+	Chosen                   map[string]string
+	Values, Sources          map[string]string
 }
 
 // EncodeSettings writes settings as the JSON that DecodeSettings reads.
 func EncodeSettings(s Settings) []byte {
 	return append(putParts(nil, []part{
-		{"lang", s.Lang, nil}, {"units", s.Units, nil}, {"theme", s.Theme, nil},
+		{"lang", s.Lang, nil}, {"units", s.Units, nil}, {"mark", s.Mark, nil}, {"theme", s.Theme, nil},
+		{"sections", s.Sections, nil},
 		{"chosen", "", s.Chosen}, {"values", "", s.Values}, {"sources", "", s.Sources},
 	}), '\n')
 }
@@ -48,7 +50,7 @@ func DecodeSettings(data []byte) (s Settings, ok bool) {
 		return s, false
 	}
 	return Settings{
-		Lang: text(m["lang"]), Units: text(m["units"]), Theme: text(m["theme"]),
+		Lang: text(m["lang"]), Units: text(m["units"]), Mark: text(m["mark"]), Sections: text(m["sections"]), Theme: text(m["theme"]),
 		Chosen: texts(m["chosen"]), Values: texts(m["values"]), Sources: texts(m["sources"]),
 	}, true
 }

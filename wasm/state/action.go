@@ -1,0 +1,87 @@
+package state
+
+import "hillwright/physics/hill"
+
+// Action is one thing that happens: a touch, a key, a file that arrives. Name
+// is one of the constants below; the rest is what it needs.
+type Action struct {
+	Name string
+	Arg  string  // what it is about: a path, "kind:id", a place of the page
+	Text string  // what was typed
+	X    float64 // a place in a picture [px of its viewBox], a part done, a width
+	Data []byte  // a file's content
+	Hill *hill.Profile
+	Err  error
+	// Now is when it happens, in seconds since 1970: the state has no clock.
+	Now int64
+}
+
+// What a person does. Elements name these in data-act.
+const (
+	Open     = "open"      // Arg: a place that opens under the sentence, or closes when it is open
+	Close    = "close"     // closes what is open
+	ShowPath = "path"      // Arg: an input whose editor opens, or closes when it is open
+	ShowAll  = "all"       // Arg: a place; shows or hides all of its inputs
+	StepUp   = "step-up"   // Arg: path
+	StepDown = "step-down" // Arg: path
+	Type     = "type"      // Arg: path, Text: the whole field
+	Typed    = "typed"     // Arg: path: the field is left
+	SetTo    = "set"       // Arg: path=value
+	SourceTo = "source"    // Arg: path=source
+	Reset    = "reset"     // Arg: path, back to the chosen thing's value
+	Choose   = "choose"    // Arg: kind:id
+
+	TypeSections = "sections"    // Text: the whole field
+	PickTrack    = "track-pick"  // asks for a file
+	StopTrack    = "track-stop"  // stops the reading
+	TypeName     = "name"        // Arg: kind, Text: the whole field
+	Keep         = "keep"        // Arg: kind: saves what is chosen, with its changes, under the typed name
+	Forget       = "forget"      // Arg: kind:id
+	Export       = "export"      // everything as a file
+	PickImport   = "import-pick" // asks for a file
+	Figures      = "figures"     // the answer as a file of JSON
+	Share        = "share"       // hands the answer's sentences on
+	Print        = "print"       //
+	Undo         = "undo"        //
+	Dismiss      = "dismiss"     // takes the message away
+	Pull         = "pull"        // shows or hides the pull diagram
+	MoveStaff    = "move-staff"  // X: place in the section
+	StaffStep    = "staff-step"  // Arg: "+" or "-": a fiftieth of the hill
+	MoveWeight   = "drag-weight" // X: place in the balance
+	WeightStep   = "weight-step" // Arg: "+" or "-": a fiftieth of what is wanted
+	WeightBack   = "weight-back" // the weight hangs again where the hill puts it
+	SetLanguage  = "language"    // Arg: tag
+	SetUnits     = "units"       // Arg: metric or imperial
+	SetMark      = "mark"        // Arg: point or comma
+	SetTheme     = "theme"       // Arg: sun, dusk, or device
+	UseNew       = "use-new"     // takes the new version
+	GoOn         = "go-on"       // after something broke
+	SaveBroken   = "broke-save"  // everything as a file, after something broke
+)
+
+// What the device reports.
+const (
+	Restored    = "restored"     // Data: a file of things; Text: settings
+	TrackFile   = "track-file"   // Arg: the file's name, Data: a track, picked or dropped
+	TrackPart   = "track-part"   // X: the part that is read
+	TrackRead   = "track-read"   // Hill, Arg: the file's name
+	TrackFailed = "track-failed" // Err
+	ImportFile  = "import-file"  // Arg: the file's name, Data
+	Stored      = "stored"       // Arg: refused, full, loose or safe
+	Waiting     = "waiting"      // a new version waits
+	Wide        = "wide"         // X: how wide pictures are [px]
+	Dropping    = "dropping"     // Arg: "over" or "": a file hangs over the page
+	DeviceLikes = "device-likes" // Arg: language tag, Text: "," or ".": what the device prefers
+	Broke       = "broke"        // Text: what happened
+	CanShare    = "can-share"    //
+)
+
+// ByHand lists the names that an element may carry in data-act.
+func ByHand() []string {
+	return []string{
+		Open, Close, ShowPath, ShowAll, StepUp, StepDown, Type, Typed, SetTo, SourceTo, Reset, Choose,
+		TypeSections, PickTrack, StopTrack, TypeName, Keep, Forget, Export, PickImport,
+		Figures, Share, Print, Undo, Dismiss, Pull, MoveStaff, StaffStep, MoveWeight, WeightStep, WeightBack,
+		SetLanguage, SetUnits, SetMark, SetTheme, UseNew, GoOn, SaveBroken,
+	}
+}
