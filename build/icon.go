@@ -31,7 +31,7 @@ func (i icon) sizes() string { return fmt.Sprintf("%dx%d", i.side, i.side) }
 var icons = []icon{
 	{"icon-192.png", 192, 1, "any"},
 	{"icon-512.png", 512, 1, "any"},
-	{"icon-mask-512.png", 512, 0.68, "maskable"},
+	{"icon-mask-512.png", 512, 0.66, "maskable"},
 	{"apple-touch-icon.png", 180, 0.85, ""},
 }
 
@@ -90,12 +90,24 @@ func hexColour(c color.RGBA) string { return fmt.Sprintf("#%02x%02x%02x", c.R, c
 // samples per pixel and direction smooth the edges.
 const samples = 4
 
-// iconPNG gives the mark as PNG.
+// iconPNG gives the mark as PNG. Pixels whose four corners are alike are not
+// sampled further: the mark's lines are wider than a pixel.
 func iconPNG(i icon) ([]byte, error) {
+	corners := make([]color.RGBA, 0, (i.side+1)*(i.side+1))
+	for y := range i.side + 1 {
+		for x := range i.side + 1 {
+			corners = append(corners, i.colour(float64(x), float64(y)))
+		}
+	}
 	picture := image.NewRGBA(image.Rect(0, 0, i.side, i.side))
 	for y := range i.side {
 		for x := range i.side {
-			picture.SetRGBA(x, y, pixel(i, x, y))
+			at := y*(i.side+1) + x
+			c := corners[at]
+			if c != corners[at+1] || c != corners[at+i.side+1] || c != corners[at+i.side+2] {
+				c = i.mixed(x, y)
+			}
+			picture.SetRGBA(x, y, c)
 		}
 	}
 	var out bytes.Buffer
@@ -104,18 +116,21 @@ func iconPNG(i icon) ([]byte, error) {
 	return out.Bytes(), err
 }
 
-func pixel(i icon, x, y int) color.RGBA {
+// mixed is the mean colour of a pixel.
+func (i icon) mixed(x, y int) color.RGBA {
 	var r, g, b int
 	for s := range samples * samples {
-		at := point{
-			x: (float64(x) + (float64(s%samples)+0.5)/samples) / float64(i.side),
-			y: (float64(y) + (float64(s/samples)+0.5)/samples) / float64(i.side),
-		}
-		c := colourAt(point{(at.x-0.5)/i.scale + 0.5, (at.y-0.5)/i.scale + 0.5})
+		c := i.colour(float64(x)+(float64(s%samples)+0.5)/samples, float64(y)+(float64(s/samples)+0.5)/samples)
 		r, g, b = r+int(c.R), g+int(c.G), b+int(c.B)
 	}
 	const n = samples * samples
 	return color.RGBA{uint8(r / n), uint8(g / n), uint8(b / n), 0xff}
+}
+
+// colour is the mark's colour at a place counted in pixels.
+func (i icon) colour(x, y float64) color.RGBA {
+	side := float64(i.side)
+	return colourAt(point{(x/side-0.5)/i.scale + 0.5, (y/side-0.5)/i.scale + 0.5})
 }
 
 // colourAt is the mark's colour at a point of the square.

@@ -5,6 +5,7 @@ import (
 	"encoding/csv"
 	"errors"
 	"io"
+	"strconv"
 	"strings"
 
 	"hillwright/physics/ask"
@@ -64,7 +65,7 @@ func csvMistake(err error) Mistake {
 	m := Mistake{File: bikesFile, Expected: "a table as spreadsheets write it (CSV)", Do: err.Error()}
 	var parse *csv.ParseError
 	if errors.As(err, &parse) {
-		m.Row, m.Column, m.Do = parse.Line, parse.Column, parse.Err.Error()
+		m.Row, m.Do = parse.Line, parse.Err.Error()+", at sign "+strconv.Itoa(parse.Column)+" of the row"
 	}
 	return m
 }

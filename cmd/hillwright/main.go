@@ -21,29 +21,29 @@ func main() {
 }
 
 // command is one of the things that hillwright does. run gets the arguments
-// after its name.
+// after its name and gives the exit code.
 type command struct {
 	name string
 	does string
-	run  func(ctx context.Context, args []string, out, problems io.Writer) error
+	run  func(ctx context.Context, args []string, out, problems io.Writer) int
 }
 
 // commands lists what hillwright does, in the order in which it is told.
 func commands() []command {
 	return []command{
-		{"pack", "make a shop's page, a folder of static files", runPack},
-		{"serve", "serve a packed page to try it", runServe},
+		{"ask", "answer a question in the terminal", func(_ context.Context, args []string, out, problems io.Writer) int {
+			return runAsk(args, out, problems)
+		}},
+		{"pack", "make a shop's page, a folder of static files", packCommand},
+		{"serve", "serve a packed page to try it", serveCommand},
 	}
 }
 
-// Exit codes: the question was wrong, the work failed.
+// Exit codes: the work failed, the command line is off.
 const (
 	exitFailed = 1
 	exitUsage  = 2
 )
-
-// usageError is a wrong command line; what was expected has been said.
-type usageError struct{ error }
 
 func run(ctx context.Context, args []string, out, problems io.Writer) int {
 	if len(args) == 0 {
@@ -56,20 +56,9 @@ func run(ctx context.Context, args []string, out, problems io.Writer) int {
 		return 0
 	}
 	for _, c := range commands() {
-		if c.name != args[0] {
-			continue
+		if c.name == args[0] {
+			return c.run(ctx, args[1:], out, problems)
 		}
-		err := c.run(ctx, args[1:], out, problems)
-		var wrong usageError
-		switch {
-		case err == nil, errors.Is(err, flag.ErrHelp):
-			return 0
-		case errors.As(err, &wrong):
-			fmt.Fprintf(problems, "hillwright %s: %v; `hillwright %s -help` tells what it takes\n", c.name, err, c.name)
-			return exitUsage
-		}
-		fmt.Fprintf(problems, "hillwright %s: %v\n", c.name, err)
-		return exitFailed
 	}
 	fmt.Fprintf(problems, "hillwright: there is no command %q\n", args[0])
 	usage(problems)
@@ -84,6 +73,9 @@ func usage(to io.Writer) {
 	}
 	fmt.Fprintln(to, "\n`hillwright COMMAND -help` tells a command's flags.")
 }
+
+// usageError is a wrong command line.
+type usageError struct{ error }
 
 // parse reads a command's flags. Nothing may stand behind them.
 func parse(set *flag.FlagSet, args []string, out io.Writer) error {
@@ -102,4 +94,18 @@ func parse(set *flag.FlagSet, args []string, out io.Writer) error {
 		return usageError{fmt.Errorf("got %q, expected flags only", set.Arg(0))}
 	}
 	return nil
+}
+
+// exitCode tells what went wrong and gives the exit code for it.
+func exitCode(name string, err error, problems io.Writer) int {
+	var wrong usageError
+	switch {
+	case err == nil, errors.Is(err, flag.ErrHelp):
+		return 0
+	case errors.As(err, &wrong):
+		fmt.Fprintf(problems, "hillwright %s: %v; `hillwright %s -help` tells what it takes\n", name, err, name)
+		return exitUsage
+	}
+	fmt.Fprintf(problems, "hillwright %s: %v\n", name, err)
+	return exitFailed
 }

@@ -14,7 +14,11 @@ import (
 	"hillwright/site"
 )
 
-func runPack(ctx context.Context, args []string, out, _ io.Writer) error {
+func packCommand(ctx context.Context, args []string, out, problems io.Writer) int {
+	return exitCode("pack", packPage(ctx, args, out), problems)
+}
+
+func packPage(ctx context.Context, args []string, out io.Writer) error {
 	set := flag.NewFlagSet("pack", flag.ContinueOnError)
 	shopDir := set.String("shop", "", "the shop's `folder` (default: the demo shop)")
 	outDir := set.String("out", "dist", "the `folder` to make; a page packed before is replaced")

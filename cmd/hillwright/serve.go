@@ -12,7 +12,11 @@ import (
 	"hillwright/build/serve"
 )
 
-func runServe(ctx context.Context, args []string, out, _ io.Writer) error {
+func serveCommand(ctx context.Context, args []string, out, problems io.Writer) int {
+	return exitCode("serve", servePage(ctx, args, out), problems)
+}
+
+func servePage(ctx context.Context, args []string, out io.Writer) error {
 	set := flag.NewFlagSet("serve", flag.ContinueOnError)
 	dir := set.String("dir", "dist", "the packed page's `folder`")
 	addr := set.String("addr", "127.0.0.1:8080", "the `address` to listen at; port 0 takes a free one")
