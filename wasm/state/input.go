@@ -112,9 +112,9 @@ func (s *State) typeIn(path, text string) {
 	s.Typing.Err = s.set(path, plain(s.Voice.FromShown(path, shown)))
 }
 
-// Number gives an input's number. Where it is not given it is what the
+// NumberOf gives an input's number. Where it is not given it is what the
 // computation takes in its place, and given is false.
-func (s *State) Number(path string) (v float64, given bool) {
+func (s *State) NumberOf(path string) (v float64, given bool) {
 	if v, ok := s.Question.Value(path); ok {
 		return v, true
 	}
@@ -139,7 +139,7 @@ func (s *State) step(path string, sign float64) {
 		return
 	}
 	s.leave()
-	si, _ := s.Number(path)
+	si, _ := s.NumberOf(path)
 	steps := s.Voice.Show(path, si) / size
 	const off = 1e-6 // a value that lies on a step may miss it by rounding
 	if sign > 0 {

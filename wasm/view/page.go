@@ -1,14 +1,86 @@
 // Package view turns a state into the page as a tree of dom nodes. Views are
 // pure functions: they compute no physics and touch no browser. Start with
-// Page, which gives the whole page; Regions gives it part by part.
+// Page, which gives the whole page.
+//
+// An element with data-region is a part that is rendered anew by itself when
+// it changed; regions may lie in each other. data-act and data-arg on an
+// element name the action (package state) that a touch asks for. A place of
+// DESIGN.md that is yet to come (Hillside, Counter, Bench) adds its regions in
+// Page, and its button in the masthead.
 package view
 
 import (
-	"hillwright/wasm/dom"
+	"unicode"
+	"unicode/utf8"
+
+	. "hillwright/wasm/dom"
+	"hillwright/wasm/draw"
 	"hillwright/wasm/state"
+	"hillwright/wasm/words"
 )
 
 // Page is the whole page: what stands inside <div id="app">.
-func Page(s *state.State) *dom.Node {
-	return dom.El("div", dom.Class("page"), dom.Text(s.Shop.Name))
+func Page(s *state.State) *Node {
+	v := &viewer{State: s, Voice: s.Voice}
+	return El("div", Class("page"),
+		draw.Hatches(),
+		v.masthead(),
+		El("main",
+			El("div", Class("asks"), v.sentence(), v.place(), v.answer()),
+			El("div", Class("pictures"), v.section(), v.balance()),
+			El("div", Class("notes"), v.figures(), v.pull(), v.cautions()),
+		),
+		v.dropping(),
+		v.message(),
+		v.broken(),
+	)
+}
+
+// viewer is a state while it is looked at, with the voice that speaks of it.
+type viewer struct {
+	*state.State
+	words.Voice
+}
+
+func (v *viewer) say(k words.Key, args ...string) Text { return Text(v.Voice.Say(k, args...)) }
+
+// region is a part of the page that is rendered anew by itself.
+func region(tag, name string, parts ...Part) *Node {
+	return El(tag, ID(name), With("data-region", name), Parts(parts))
+}
+
+// heading is a part's heading, for ears only where the look needs none.
+func (v *viewer) heading(k words.Key, class string) *Node {
+	return El("h2", If(class != "", Class(class)), v.say(k))
+}
+
+// button is a thing to touch that is not a blank of the sentence.
+func button(class, act, arg string, parts ...Part) *Node {
+	return El("button", With("type", "button"), Class(class), Act(act, arg), Parts(parts))
+}
+
+func flag(name string, yes bool) Attr {
+	if yes {
+		return With(name, "true")
+	}
+	return With(name, "false")
+}
+
+// capital makes the first letter of a sentence a large one.
+func capital(s string) string {
+	r, size := utf8.DecodeRuneInString(s)
+	return string(unicode.ToUpper(r)) + s[size:]
+}
+
+func (v *viewer) masthead() *Node {
+	opener := func(place string, key words.Key) *Node {
+		return button("plain", state.Open, place, ID("blank-"+place),
+			flag("aria-expanded", v.Place == place), With("aria-controls", "place"), v.say(key))
+	}
+	return region("header", "masthead", Class("masthead"),
+		El("h1", Text(v.Shop.Name)),
+		El("div", Class("openers"), opener(state.PlaceKept, words.HeadKept), opener(state.PlaceSettings, words.HeadSettings)),
+		If(v.Device.Waiting, El("p", Class("waiting"), With("role", "status"),
+			v.say(words.NewVersion), Text(" "), button("plain", state.UseNew, "", v.say(words.ButtonUseNew)))),
+	)
 }

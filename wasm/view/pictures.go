@@ -1,0 +1,95 @@
+package view
+
+import (
+	"math"
+
+	. "hillwright/wasm/dom"
+	"hillwright/wasm/draw"
+	"hillwright/wasm/state"
+	"hillwright/wasm/words"
+)
+
+// section is the hill as a cut through the ground, with the staff on it.
+func (v *viewer) section() *Node {
+	if v.Answer == nil || v.Profile == nil {
+		return region("section", "section", Bare("hidden"))
+	}
+	size := v.SectionSize()
+	picture := draw.Section(v.Profile, v.Answer, size, v.Voice)
+	reading := v.say(words.SectionHelp)
+	if !math.IsNaN(v.StaffM) {
+		at := draw.SectionAtDistance(v.Profile, v.Answer, size, v.StaffM)
+		putStaff(picture, at)
+		reading = Text(capital(draw.StaffText(at, v.Rig, v.Voice)))
+	}
+	return region("section", "section", Class("picture-part"), With("aria-labelledby", "section-head"),
+		El("h2", ID("section-head"), v.say(words.SectionTitle)),
+		// Beside the picture, not on it: a thumb that moves the staff would lie on it.
+		region("p", "staff-reading", Class("staff-reading"), With("role", "status"), reading),
+		region("div", "section-picture", Class("canvas"), picture),
+		El("div", Class("row spread"),
+			button("step small", state.StaffStep, "-", With("aria-label", v.Voice.Say(words.StaffBack)), Text("‹")),
+			v.swatches(),
+			button("step small", state.StaffStep, "+", With("aria-label", v.Voice.Say(words.StaffOn)), Text("›"))),
+		v.table("section-table", func() *Node { return draw.SectionText(v.Profile, v.Answer, v.Rig, v.Voice) }),
+	)
+}
+
+// putStaff stands the picture's staff at a place and makes it a region, so that
+// it alone changes while a finger moves it.
+func putStaff(picture *Node, at draw.Staff) {
+	picture.Walk(func(n *Node) {
+		if class, _ := n.Attr("class"); class != "staff" {
+			return
+		}
+		kept := []Attr{With("data-region", "staff"), With("transform", at.Transform())}
+		for _, a := range n.Attrs {
+			if a.Name != "visibility" && a.Name != "transform" {
+				kept = append(kept, a)
+			}
+		}
+		n.Attrs = kept
+	})
+}
+
+// table is a picture's figures as text, on demand.
+func (v *viewer) table(name string, make func() *Node) *Node {
+	return El("details", Class("in-figures"), El("summary", v.say(words.SameInFigures)),
+		El("div", Class("table-room"), With("role", "region"), With("tabindex", "0"), With("aria-labelledby", name+"-of"), El("span", ID(name+"-of"), Class("unseen"), v.say(words.SameInFigures)), make()))
+}
+
+// balance is the wanted pull against every limit's peg.
+func (v *viewer) balance() *Node {
+	if v.Answer == nil || len(v.Answer.Balance.Pegs) == 0 {
+		return region("section", "balance", Bare("hidden"))
+	}
+	b := &v.Answer.Balance
+	reading := Parts{v.say(words.BalanceHelp)}
+	if grade, tried := v.TriedGrade(); tried {
+		reading = Parts{El("b", Text(v.Voice.Pull(v.WeightN))), Text(" · "), v.say(words.BalanceTried, v.Grade(grade))}
+	}
+	return region("section", "balance", Class("picture-part"), With("aria-labelledby", "balance-head"),
+		El("h2", ID("balance-head"), v.say(words.BalanceTitle)),
+		region("p", "balance-reading", Class("staff-reading"), With("role", "status"), reading),
+		region("div", "balance-picture", Class("canvas"), draw.Balance(b, v.BalanceSize(), v.Voice, draw.BalanceOptions{WantedN: v.WeightN})),
+		El("div", Class("row"), If(!math.IsNaN(v.WeightN), button("plain", state.WeightBack, "", v.say(words.WeightBackToHill)))),
+		v.table("balance-table", func() *Node { return draw.BalanceText(b, v.Voice) }),
+	)
+}
+
+// pull is the pull diagram, for those who ask for it.
+func (v *viewer) pull() *Node {
+	if v.Answer == nil {
+		return region("section", "pull", Bare("hidden"))
+	}
+	opener := El("h2", button("plain wide", state.Pull, "", flag("aria-expanded", v.ShowPull), With("aria-controls", "pull"), v.say(words.PullTitle)))
+	if !v.ShowPull {
+		return region("section", "pull", opener)
+	}
+	grade, running := v.Answer.Balance.Grade, v.Settled()
+	return region("section", "pull", Class("picture-part"), opener,
+		El("p", Class("staff-reading"), v.say(words.PullHelp)),
+		El("div", Class("canvas"), draw.PullDiagram(v.Rig, grade, running, v.PullSize(), v.Voice)),
+		v.table("pull-table", func() *Node { return draw.PullText(v.Rig, grade, running, v.Voice) }),
+	)
+}
