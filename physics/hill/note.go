@@ -7,11 +7,11 @@ type NoteKind uint8
 const (
 	NoteNoHeights     NoteKind = iota // the track has no heights: the profile is level
 	NoteZeroHeights                   // every height is zero: taken for no heights
-	NoteSpike                         // a point that lies off the way was dropped
+	NoteSpike                         // a point or a height off the way was dropped
 	NoteDuplicate                     // points at the same place were joined
 	NotePause                         // standing still was cut out
 	NoteGap                           // a hole in the track was bridged by a straight line
-	NoteSegments                      // several segments were joined
+	NoteSegments                      // segments were joined; what lies between was not recorded and is left out
 	NoteCoarseHeights                 // heights come in whole metres: smoothed
 	NoteSomeHeights                   // some points had no height: filled in between
 )

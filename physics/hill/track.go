@@ -28,10 +28,12 @@ type Track struct {
 // nearly everybody.
 type Options struct {
 	// SmoothM is the length scale of the smoothing of heights [m], 5 to 500: a
-	// wave of 2π·SmoothM in length keeps half its height. 0 leaves the choice
+	// gentle wave of 2π·SmoothM in length keeps half its height; sharp bends keep
+	// more. 0 leaves the choice
 	// to cross-validation, between ShortestSmoothM and LongestSmoothM.
 	SmoothM float64
-	// PieceM is the length of the pieces [m, horizontal], 1 to 1000. 0 means 10
-	// m, and more on routes that would have over 20,000 pieces.
+	// PieceM is the length of the pieces [m, horizontal], 1 to 1000. 0 means
+	// 10 m, up to 50 m where points are that sparse, and more on routes that
+	// would have over 20,000 pieces.
 	PieceM float64
 }
