@@ -155,11 +155,13 @@ func (v Voice) what(r *rig.Rig, l rig.Limit, gear int, speedMps float64) string 
 		return v.text(WhatCadence)
 	case rig.Coasting:
 		return v.text(WhatCoasting)
+	case rig.Rider:
+		if m.Kind == motor.None || r.Level == 0 {
+			return v.text(WhatRiderAlone)
+		}
+		return v.Say(WhatRider, v.Number(float64(r.Level), 0))
 	}
-	if m.Kind == motor.None || r.Level == 0 {
-		return v.text(WhatRiderAlone)
-	}
-	return v.Say(WhatRider, v.Number(float64(r.Level), 0))
+	return v.Limit(l)
 }
 
 // Gear names a gear by its teeth: "38/46", with a hub gear "38/18 · 3".
