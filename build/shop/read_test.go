@@ -221,7 +221,7 @@ func TestMistakesAllAtOnce(t *testing.T) {
 		`bikes.csv: row 3, column 5 (tyre): got "37", expected width and bead seat in mm by ISO 5775, such as 47-622`,
 		`hills/y.gpx: `,
 		`logo.svg: expected an SVG picture`,
-		`shop.toml: row 3, column 7 (law): got "moon", expected one of eu-25, gb-15mph, us-1, us-3, jp-24, eu-45`,
+		`shop.toml: row 3, column 7 (law): got "moon", expected one of eu-25, gb-15mph, us-1, us-2, us-3, jp-24, eu-l1e-a, eu-45, ch-25, ch-45, au-25`,
 		`shop.toml: row 17, column 11 (mass_kg): got "-9", expected a number from 0 to 250 kg`,
 	}
 	if err == nil {

@@ -1,6 +1,10 @@
 package brake
 
-import "hillwright/physics/unit"
+import (
+	"math"
+
+	"hillwright/physics/unit"
+)
 
 // Pair is a bike's two brakes with the temperatures at which a rider should be
 // told [°C]. FrontShare is the part of the braking that the front one does
@@ -17,19 +21,20 @@ type Pair struct {
 func FrontShare() unit.Band { return unit.Band{Low: 0.40, Usual: 0.60, High: 0.75} }
 
 // NewPair puts a front and a rear brake together. Where one is of kind "none"
-// the other does all, whatever the share.
+// the other does all, whatever the share. One of the two must be there.
 func NewPair(front, rear Kind, frontShare float64) Pair {
-	switch {
-	case front.MassKg.Usual <= 0:
-		frontShare = 0
-	case rear.MassKg.Usual <= 0:
-		frontShare = 1
-	}
-	return Pair{
+	p := Pair{
 		Front: front.Sink(), Rear: rear.Sink(),
 		FrontCautionC: front.CautionC.Usual, RearCautionC: rear.CautionC.Usual,
 		FrontShare: frontShare,
 	}
+	if front.None() {
+		p.FrontShare, p.FrontCautionC = 0, math.Inf(1)
+	}
+	if rear.None() {
+		p.FrontShare, p.RearCautionC = 1, math.Inf(1)
+	}
+	return p
 }
 
 // Piece is a piece of road: its length [m, ≥ 0] and the force with which it
@@ -60,7 +65,7 @@ type Peak struct {
 // where the air and the road do it.
 func (d *Descent) HoldW(driveN, speedMps float64) float64 {
 	air := speedMps + d.HeadMps
-	n := driveN - d.DragN*air*abs(air)
+	n := driveN - d.DragN*air*math.Abs(air)
 	if n <= 0 {
 		return 0
 	}
@@ -85,7 +90,7 @@ func (p *Pair) Peak(d *Descent, speedMps float64) Peak {
 	front, rear := d.FrontC, d.RearC
 	peak := Peak{FrontC: front, RearC: rear}
 	frontShare, rearShare := p.FrontShare, 1-p.FrontShare
-	air := abs(speedMps + d.HeadMps)
+	air := math.Abs(speedMps + d.HeadMps)
 	atM := 0.0
 	for i := range d.Pieces {
 		piece := &d.Pieces[i]
@@ -151,11 +156,4 @@ func (p *Pair) SpeedByHeat(d *Descent, mostMps float64) float64 {
 		}
 	}
 	return cool
-}
-
-func abs(x float64) float64 {
-	if x < 0 {
-		return -x
-	}
-	return x
 }

@@ -77,6 +77,9 @@ func KindByID(id string) (k Kind, ok bool) {
 	return Kind{}, false
 }
 
+// None tells that there is no brake.
+func (k *Kind) None() bool { return k.MassKg.Usual <= 0 }
+
 // Air beside a warm brake, at about 100 °C: conductivity [W/(m·K)], kinematic
 // viscosity [m²/s], Prandtl number. From memory of the usual tables.
 const (

@@ -10,12 +10,13 @@ import "math"
 // StillWK + WindWK·√(air speed) [W/K, both ≥ 0; WindWK in W/K per √(m/s)].
 type Sink struct{ CapacityJK, StillWK, WindWK float64 }
 
-// WK is the conductance to the air [W/K] at an air speed [m/s, ≥ 0].
-func (s *Sink) WK(airMps float64) float64 { return s.StillWK + s.WindWK*math.Sqrt(airMps) }
+// WK is the conductance to the air [W/K] at an air speed [m/s; from behind it
+// cools as well as from ahead].
+func (s *Sink) WK(airMps float64) float64 { return s.StillWK + s.WindWK*math.Sqrt(math.Abs(airMps)) }
 
 // Step gives the temperature [°C] after a braking power [W, ≥ 0] has gone into
 // the brake for a time [s, ≥ 0] in air of a temperature [°C] that passes at a
-// speed [m/s, ≥ 0]. It is exact for constant inputs, for any length of step:
+// speed [m/s]. It is exact for constant inputs, for any length of step:
 // T∞ + (T − T∞)·exp(−g·t/C).
 func (s *Sink) Step(tempC, airC, powerW, airMps, seconds float64) float64 {
 	g := s.WK(airMps)

@@ -341,9 +341,14 @@ const (
 	ChoiceEU25
 	ChoiceGB15
 	ChoiceUS1
+	ChoiceUS2
 	ChoiceUS3
 	ChoiceJP24
+	ChoiceEUL1eA
 	ChoiceEU45
+	ChoiceCH25
+	ChoiceCH45
+	ChoiceAU25
 	BlankTyre
 	BlankNoHub
 	BlankNoLevels
