@@ -101,13 +101,13 @@ func balanceSummary(b *ride.Balance, v words.Voice) string {
 	return v.Say(words.BalanceText, v.Pull(b.WantedN), v.Grade(b.Grade), v.Speed(b.SpeedMps))
 }
 
-// headroom of the first peg at the weight's place.
+// headroom of the first peg at the weight's place, −9 at least as in ride.Weigh.
 func (c *balance) headroom() float64 {
 	first := c.of.Pegs[0]
 	if c.wantedN == c.of.WantedN || first.PullN <= 0 {
 		return first.Headroom
 	}
-	return 1 - c.wantedN/first.PullN
+	return clampTo(1-c.wantedN/first.PullN, -9, 1)
 }
 
 // body is the barrel with ring, hook, spring and scale.

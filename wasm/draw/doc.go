@@ -11,6 +11,7 @@
 //	picture            every outermost svg (also picture-section, picture-balance, picture-pull)
 //	words, figure      text: plain words; figures and what matters (bolder)
 //	quiet              text: scales
+//	stops              with figure: the words at the stake (accent)
 //	on-ink             text that stands on an ink-filled body
 //	halo               with words or figure: text over lines (paint-order stroke, stroke of the paper's colour)
 //	hatches            the svg that holds the patterns: must not be display: none (position absolute will do)

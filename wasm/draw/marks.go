@@ -29,7 +29,7 @@ func (s *section) marks(v words.Voice) sectionMarks {
 	}
 	from, to, bar := s.bracketBar(&m, stakeAt, stakeTop)
 	if s.answer.Stalled {
-		words := label{lines: []string{v.Say(words.SectionStalled, v.Length(s.answer.StalledAtM))}, px: wordsPx, class: "figure halo"}
+		words := label{lines: []string{v.Say(words.SectionStalled, v.Length(s.answer.StalledAtM))}, px: wordsPx, class: "figure halo stops"}
 		w := words.width()
 		words, _ = s.aloft(words, m.taken, stakeTop+15,
 			stakeAt-12-w, stakeAt+12, stakeAt-w/2)

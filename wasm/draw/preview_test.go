@@ -15,8 +15,15 @@ import (
 	"hillwright/wasm/words"
 )
 
+// fataler is a test, a benchmark or a property.
+type fataler interface {
+	Helper()
+	Fatal(args ...any)
+	Fatalf(format string, args ...any)
+}
+
 // real answers a question about typed sections; set is pairs of path and value.
-func real(t testing.TB, sections string, set ...string) (*hill.Profile, *ride.Answer, *rig.Rig, float64) {
+func real(t fataler, sections string, set ...string) (*hill.Profile, *ride.Answer, *rig.Rig, float64) {
 	t.Helper()
 	p, err := hill.ParseSections(sections)
 	if err != nil {
