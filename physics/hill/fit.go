@@ -14,6 +14,7 @@ const (
 	scalesTried     = 8
 	rounds          = 6    // of reweighting
 	leastSpreadM    = 0.2  // heights are never thought to be better than this
+	leastPull       = 0.2  // weight of a rounded height within half a metre
 	leastStiff      = 0.02 // what is left of the roughness weight at the sharpest bend
 )
 
@@ -109,7 +110,7 @@ func (s *smoother) forgiveOutliers() {
 }
 
 // forgiveHalfMetre lets the curve pass anywhere within half a metre of a
-// height that was rounded to whole metres: only what lies beyond pulls.
+// height that was rounded to whole metres: what lies within pulls little.
 func (s *smoother) forgiveHalfMetre() {
 	for i := range s.data {
 		o := &s.data[i]
@@ -117,7 +118,7 @@ func (s *smoother) forgiveHalfMetre() {
 			continue
 		}
 		off := math.Abs(o.heightM - s.at(o))
-		s.w[i] = o.weight * max(0.1, 1-0.5/max(off, 0.5))
+		s.w[i] = o.weight * max(leastPull, 1-0.5/max(off, 0.5))
 	}
 }
 
@@ -140,6 +141,6 @@ func (s *smoother) forgiveBends(spacingM float64) {
 	usual := max(3*medianOf(bends), 0.01*spacingM)
 	for i := 1; i < n-1; i++ {
 		u := bend(i) / usual
-		s.p[i] = max(0.1, 1/(1+u*u))
+		s.p[i] = max(leastStiff, 1/(1+u*u))
 	}
 }
