@@ -2,14 +2,18 @@ package ask
 
 import (
 	"math"
+	"slices"
 	"sort"
 	"strconv"
 	"strings"
 
+	"hillwright/physics/brake"
 	"hillwright/physics/gear"
 	"hillwright/physics/motor"
+	"hillwright/physics/pack"
+	"hillwright/physics/rig"
+	"hillwright/physics/road"
 	"hillwright/physics/rule"
-	"hillwright/physics/unit"
 )
 
 // Form is how an input is written.
@@ -60,6 +64,8 @@ var catalogue = []Input{
 	number("rider.cadence_high_rpm", "rpm", 50, 150, 8, true, Assumed, func(q *Question) *float64 { return &q.Rider.CadenceHigh }),
 	number("rider.crank_m", "m", 0.1, 0.2, 0.0025, true, Assumed, func(q *Question) *float64 { return &q.Rider.CrankM }),
 	number("rider.hold_speed_mps", "m/s", 0.5, 4, 0.3, true, Assumed, func(q *Question) *float64 { return &q.Rider.HoldMps }),
+	number("rider.critical_w", "W", 20, 500, 0.15, false, Assumed, func(q *Question) *float64 { return &q.Rider.CriticalW }),
+	number("rider.reserve_j", "J", 2000, 40000, 0.25, false, Assumed, func(q *Question) *float64 { return &q.Rider.ReserveJ }),
 
 	number("bike.mass_kg", "kg", 6, 120, 0.5, true, Sheet, func(q *Question) *float64 { return &q.Bike.MassKg }),
 	number("bike.crr", "1", 0.001, 0.1, 0.25, false, Assumed, func(q *Question) *float64 { return &q.Bike.Crr }),
@@ -78,11 +84,36 @@ var catalogue = []Input{
 	number("bike.motor.power_w", "W", 0, 5000, 0.10, false, Sheet, func(q *Question) *float64 { return &q.Bike.Motor.PowerW }),
 	factors("bike.motor.levels", 0, 10, "none", func(q *Question) *[]float64 { return &q.Bike.Motor.Levels }),
 	number("bike.motor.cadence_high_rpm", "rpm", 40, 200, 5, true, Assumed, func(q *Question) *float64 { return &q.Bike.Motor.CadenceHigh }),
-	number("bike.motor.efficiency", "1", 0.2, 1, 0.08, false, Assumed, func(q *Question) *float64 { return &q.Bike.Motor.Efficiency }),
-	number("bike.pack_wh", "Wh", 0, 5000, 0.05, false, Sheet, func(q *Question) *float64 { return &q.Bike.PackWh }),
+	yesNo("bike.motor.direct_drive", Sheet, func(q *Question) *bool { return &q.Bike.Motor.DirectDrive }),
+	number("bike.motor.voltage_v", "V", 12, 100, 0.02, false, Assumed, func(q *Question) *float64 { return &q.Bike.Sheet.SystemV }),
+	completed("bike.motor.mass_kg", "kg", 1, 15, func(q *Question) *float64 { return &q.Bike.Sheet.MassKg }),
+	completed("bike.motor.torque_nm_per_a", "N·m/A", 0.005, 5, func(q *Question) *float64 { return &q.Bike.Sheet.TorqueNmPerA }),
+	completed("bike.motor.winding_ohm", "Ω", 0.001, 2, func(q *Question) *float64 { return &q.Bike.Sheet.WindingOhm }),
+	completed("bike.motor.max_pack_a", "A", 2, 200, func(q *Question) *float64 { return &q.Bike.Sheet.MaxPackA }),
+	completed("bike.motor.ease_from_c", "°C", 50, 160, func(q *Question) *float64 { return &q.Bike.Sheet.EaseFromC }),
+	completed("bike.motor.ease_to_c", "°C", 60, 200, func(q *Question) *float64 { return &q.Bike.Sheet.EaseToC }),
+	completed("bike.motor.case_w_per_k", "W/K", 0.05, 20, func(q *Question) *float64 { return &q.Bike.Sheet.CaseWPerK }),
+	number("bike.pack.energy_wh", "Wh", 0, 5000, 0.05, false, Sheet, func(q *Question) *float64 { return &q.Bike.Pack.EnergyWh }),
+	chemistry(),
+	number("bike.pack.health", "1", 0.3, 1, 0.08, true, Assumed, func(q *Question) *float64 { return &q.Bike.Pack.Health }),
+	completed("bike.pack.resistance_ohm", "Ω", 0.005, 3, func(q *Question) *float64 { return &q.Bike.Pack.ResistanceOhm }),
+	completed("bike.pack.max_a", "A", 2, 200, func(q *Question) *float64 { return &q.Bike.Pack.MaxA }),
+	number("bike.wheelbase_m", "m", 0.7, 2.6, 0.02, false, Assumed, func(q *Question) *float64 { return &q.Bike.Places.WheelbaseM }),
+	number("bike.mass_ahead_m", "m", -0.5, 2, 0.06, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.BikeAheadM }),
+	number("bike.mass_height_m", "m", 0.2, 1.2, 0.06, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.BikeHeightM }),
+	number("bike.rider_ahead_m", "m", 0, 2, 0.06, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.RiderAheadM }),
+	number("bike.rider_height_m", "m", 0.5, 1.6, 0.06, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.RiderHeightM }),
+	number("bike.rack_ahead_m", "m", -0.8, 1, 0.05, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.RackAheadM }),
+	number("bike.rack_height_m", "m", 0.2, 1.5, 0.08, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.RackHeightM }),
+	number("bike.box_ahead_m", "m", 0.3, 2.5, 0.05, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.BoxAheadM }),
+	number("bike.box_height_m", "m", 0.2, 1.5, 0.08, true, Assumed, func(q *Question) *float64 { return &q.Bike.Places.BoxHeightM }),
+	brakeKind("bike.front_brake", func(q *Question) *string { return &q.Bike.FrontBrake }),
+	brakeKind("bike.rear_brake", func(q *Question) *string { return &q.Bike.RearBrake }),
+	number("bike.front_brake_share", "1", 0, 1, 0.15, true, Assumed, func(q *Question) *float64 { return &q.Bike.FrontBrakeShare }),
 
 	number("load.mass_kg", "kg", 0, 250, 0.10, false, Assumed, func(q *Question) *float64 { return &q.Load.MassKg }),
 	number("load.cda_m2", "m²", 0, 2, 0.30, false, Assumed, func(q *Question) *float64 { return &q.Load.CdAM2 }),
+	loadPlace(),
 
 	number("day.temperature_c", "°C", -30, 50, 2, true, Assumed, func(q *Question) *float64 { return (*float64)(&q.Day.TemperatureC) }),
 	number("day.humidity", "1", 0, 1, 0.15, true, Assumed, func(q *Question) *float64 { return &q.Day.Humidity }),
@@ -90,11 +121,22 @@ var catalogue = []Input{
 	blank(number("day.density_kgm3", "kg/m³", 0.4, 1.7, 0.01, false, Measured, func(q *Question) *float64 { return &q.Day.DensityKgM3 }), "computed"),
 	number("day.wind_mps", "m/s", -25, 25, 1, true, Assumed, func(q *Question) *float64 { return &q.Day.WindMps }),
 	blank(number("day.wind_from_deg", "°", 0, 360, 20, true, Assumed, func(q *Question) *float64 { return &q.Day.WindFromDeg }), "ahead"),
+	ground(),
+	blank(number("day.grip", "1", 0.05, 1.2, 0.1, true, Measured, func(q *Question) *float64 { return &q.Day.Mu }), "ground"),
+	blank(number("day.pack_c", "°C", -30, 60, 3, true, Measured, func(q *Question) *float64 { return &q.Day.PackC }), "day"),
 
 	level(),
 	number("ride.start_mps", "m/s", 0, 15, 0, true, Assumed, func(q *Question) *float64 { return &q.Ride.StartMps }),
 	number("ride.down_mps", "m/s", 1, 25, 1, true, Assumed, func(q *Question) *float64 { return &q.Ride.DownMps }),
 	law(),
+	number("ride.charge", "1", 0, 1, 0.03, true, Assumed, func(q *Question) *float64 { return &q.Ride.Charge }),
+	number("ride.charge_kept", "1", 0, 0.9, 0, true, Assumed, func(q *Question) *float64 { return &q.Ride.ChargeKept }),
+	yesNo("ride.back", Assumed, func(q *Question) *bool { return &q.Ride.Back }),
+	whole("ride.trips", 1, 30, func(q *Question) *int { return &q.Ride.Trips }),
+	number("ride.pause_s", "s", 0, 86400, 0, true, Assumed, func(q *Question) *float64 { return &q.Ride.PauseS }),
+	yesNo("ride.recover", Assumed, func(q *Question) *bool { return &q.Ride.Recover }),
+	number("ride.sight_m", "m", 3, 300, 0.3, false, Assumed, func(q *Question) *float64 { return &q.Ride.SightM }),
+	number("ride.reaction_s", "s", 0.2, 4, 0.3, true, Assumed, func(q *Question) *float64 { return &q.Ride.ReactS }),
 }
 
 func tyre() Input {
@@ -170,12 +212,14 @@ func factors(path string, low, high float64, none string, at func(*Question) *[]
 	}}
 }
 
-func motorKind() Input {
-	return Input{Path: "bike.motor.kind", Form: Choice, Choices: motor.Kinds(), Source: Sheet, text: func(q *Question) (func() string, func(string) bool) {
-		return func() string { return q.Bike.Motor.Kind.String() }, func(s string) bool {
-			for i, name := range motor.Kinds() {
-				if name == s {
-					q.Bike.Motor.Kind = motor.Kind(i)
+// choice makes an input that takes one of some words; at gives what the word's
+// index is kept in.
+func choice(path string, words []string, s Source, get func(*Question) int, set func(*Question, int)) Input {
+	return Input{Path: path, Form: Choice, Choices: words, Source: s, text: func(q *Question) (func() string, func(string) bool) {
+		return func() string { return words[get(q)] }, func(text string) bool {
+			for i, word := range words {
+				if word == text {
+					set(q, i)
 					return true
 				}
 			}
@@ -184,17 +228,75 @@ func motorKind() Input {
 	}}
 }
 
+// word makes an input that takes one of some words and keeps the word.
+func word(path string, words []string, s Source, at func(*Question) *string) Input {
+	return choice(path, words, s, func(q *Question) int {
+		return max(0, slices.Index(words, *at(q)))
+	}, func(q *Question, i int) { *at(q) = words[i] })
+}
+
+func yesNo(path string, s Source, at func(*Question) *bool) Input {
+	return choice(path, []string{"no", "yes"}, s, func(q *Question) int {
+		if *at(q) {
+			return 1
+		}
+		return 0
+	}, func(q *Question, i int) { *at(q) = i == 1 })
+}
+
+func motorKind() Input {
+	return choice("bike.motor.kind", motor.Kinds(), Sheet, func(q *Question) int { return int(q.Bike.Motor.Kind) },
+		func(q *Question, i int) { q.Bike.Motor.Kind = motor.Kind(i) })
+}
+
+func chemistry() Input {
+	return choice("bike.pack.chemistry", pack.Chemistries(), Assumed, func(q *Question) int { return int(q.Bike.Pack.Chemistry) },
+		func(q *Question, i int) { q.Bike.Pack.Chemistry = pack.Chemistry(i) })
+}
+
+func loadPlace() Input {
+	return choice("load.place", rig.LoadPlaces(), Assumed, func(q *Question) int { return int(q.Load.Place) },
+		func(q *Question, i int) { q.Load.Place = rig.LoadPlace(i) })
+}
+
+func brakeKind(path string, at func(*Question) *string) Input {
+	var ids []string
+	for _, k := range brake.Kinds() {
+		ids = append(ids, k.ID)
+	}
+	return word(path, ids, Sheet, at)
+}
+
+func ground() Input {
+	var ids []string
+	for _, g := range road.Grounds() {
+		ids = append(ids, g.ID)
+	}
+	return word("day.ground", ids, Assumed, func(q *Question) *string { return &q.Day.Ground })
+}
+
 func law() Input {
 	var ids []string
 	for _, l := range rule.All() {
 		ids = append(ids, l.ID)
 	}
-	return Input{Path: "ride.law", Form: Choice, Choices: ids, Source: Assumed, text: func(q *Question) (func() string, func(string) bool) {
-		return func() string { return q.Ride.LawID }, func(s string) bool {
-			if _, ok := rule.ByID(s); !ok {
+	return word("ride.law", ids, Assumed, func(q *Question) *string { return &q.Ride.LawID })
+}
+
+// completed is a number that a maker's sheet seldom gives; "assumed" leaves it
+// to the class default, with the default's own band.
+func completed(path, unitName string, low, high float64, at func(*Question) *float64) Input {
+	return blank(number(path, unitName, low, high, 0.05, false, Sheet, at), "assumed")
+}
+
+func whole(path string, low, high int, at func(*Question) *int) Input {
+	return Input{Path: path, Unit: "1", Form: Whole, Low: float64(low), High: float64(high), Source: Assumed, text: func(q *Question) (func() string, func(string) bool) {
+		return func() string { return strconv.Itoa(*at(q)) }, func(s string) bool {
+			n, err := strconv.Atoi(s)
+			if err != nil || n < low || n > high {
 				return false
 			}
-			q.Ride.LawID = s
+			*at(q) = n
 			return true
 		}
 	}}
@@ -255,27 +357,4 @@ func InputAt(path string) (Input, bool) {
 		}
 	}
 	return Input{}, false
-}
-
-// Default is the question that stands before anything is chosen: a trekking
-// bike with a crank motor by class defaults, a steady rider, a bag, a mild day.
-// Each number is a class default, common practice, no source, unless its
-// package says otherwise.
-func Default() Question {
-	q := Question{Source: map[string]Source{}}
-	nan := math.NaN()
-	q.Rider.MassKg, q.Rider.PowerW = 80, 110
-	q.Rider.CadenceLow, q.Rider.CadenceLiked, q.Rider.CadenceHigh = 45, 70, 100
-	q.Rider.CrankM, q.Rider.HoldMps = 0.17, 1.4
-	b := &q.Bike
-	b.MassKg, b.Crr, b.CdAM2, b.WheelDragM2, b.WheelInertiaKgM2 = 25, 0.008, 0.55, 0.0044, 0.25
-	b.Tyre, b.RolloutM = gear.Tyre{WidthMM: 47, BeadSeatMM: 622}, nan
-	b.Train = gear.Train{Rings: []int{38}, Sprockets: []int{11, 13, 15, 18, 21, 24, 28, 32, 37, 42, 46}, Efficiency: 0.96}
-	b.ShiftS = 0.3
-	b.Motor = motor.Motor{Kind: motor.Crank, TorqueNm: 65, PowerW: 500, Levels: []float64{0.6, 1.2, 2, 3.2}, CadenceHigh: 115, Efficiency: 0.78}
-	b.PackWh = 500
-	q.Day.TemperatureC, q.Day.Humidity = unit.Celsius(15), 0.6
-	q.Day.AltitudeM, q.Day.DensityKgM3, q.Day.WindFromDeg = nan, nan, nan
-	q.Ride = Ride{Level: highestLevel, StartMps: 0, DownMps: 25 / 3.6, LawID: "eu-25"}
-	return q
 }

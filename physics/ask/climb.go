@@ -26,13 +26,21 @@ func (q *Question) level() int {
 	return q.Ride.Level
 }
 
+func (q *Question) options() ride.Options {
+	o := &q.Ride
+	return ride.Options{
+		StartMps: o.StartMps, DownMps: o.DownMps, Charge: o.Charge, Reserve: o.ChargeKept,
+		Back: o.Back, Trips: o.Trips, PauseS: o.PauseS, Recover: o.Recover, SightM: o.SightM, ReactS: o.ReactS,
+	}
+}
+
 // Climb answers the question for a hill.
 func (q *Question) Climb(p *hill.Profile) (*rig.Rig, *ride.Answer, error) {
 	r, err := q.Rig(middleHeight(p))
 	if err != nil {
 		return nil, nil, err
 	}
-	a, err := ride.Climb(r, p, ride.Options{StartMps: q.Ride.StartMps, DownMps: q.Ride.DownMps})
+	a, err := ride.Climb(r, p, q.options())
 	if err != nil {
 		return nil, nil, err
 	}
@@ -58,6 +66,6 @@ func (q *Question) Steady(g unit.Grade) (*rig.Rig, *ride.SteadyAnswer, error) {
 	if err != nil {
 		return nil, nil, err
 	}
-	a := ride.Steady(r, g, q.Ride.DownMps)
+	a := ride.Steady(r, g, q.options())
 	return r, &a, nil
 }

@@ -26,14 +26,19 @@ func AnswerJSON(r *rig.Rig, a *ride.Answer, why string) []byte {
 	w.number("to_m", h.ToM)
 	w.number("grade", float64(h.Grade))
 	w.number("steepest_grade", float64(h.SteepestGrade))
+	w.number("trip", float64(h.Trip+1))
+	w.flag("on_the_way_back", h.Back)
 	w.running(r, &h.Running, h.Running.SpeedMps > 0)
 	w.close('}')
-	w.number("climb_time_s", a.TimeS)
+	w.start(r, &a.Start)
+	w.number("climb_time_s", a.ClimbS)
+	w.number("tour_time_s", a.TourS)
 	e := &a.Energy
 	w.number("rider_energy_wh", e.RiderJ*whPerJ)
 	w.number("motor_energy_wh", e.MotorJ*whPerJ)
 	w.number("pack_energy_wh", e.FromPackJ*whPerJ)
 	w.number("brake_energy_wh", e.BrakesJ*whPerJ)
+	w.number("recovered_energy_wh", e.RecoveredJ*whPerJ)
 	w.number("rider_share", share(e.RiderJ, e.MotorJ))
 	w.number("motor_share", share(e.MotorJ, e.RiderJ))
 	w.number("distance_m", a.LengthM)
@@ -44,6 +49,17 @@ func AnswerJSON(r *rig.Rig, a *ride.Answer, why string) []byte {
 	} else {
 		w.null("stalled_at_m")
 	}
+	w.number("winding_peak_c", a.WindingPeakC)
+	w.number("minutes_to_easing_off", a.EasingS/60)
+	w.number("charge_left", a.ChargeLeft)
+	if a.CutOut {
+		w.number("pack_gives_out_at_m", a.CutOutAtM)
+	} else {
+		w.null("pack_gives_out_at_m")
+	}
+	w.number("trips_per_charge", a.TripsPerCharge)
+	w.number("w_prime_left_j", a.ReserveLeftJ)
+	w.wayDown(&a.WayDown)
 	w.rigFacts(r)
 	w.close('}')
 	return append(w.out, '\n')
@@ -58,6 +74,8 @@ func SteadyJSON(r *rig.Rig, g unit.Grade, a *ride.SteadyAnswer, why string) []by
 	w.number("grade", float64(g))
 	w.balance(r, &a.Balance)
 	w.running(r, &a.Running, a.Held)
+	w.start(r, &a.Start)
+	w.number("minutes_to_easing_off", a.EasingS/60)
 	w.rigFacts(r)
 	w.close('}')
 	return append(w.out, '\n')
@@ -95,9 +113,43 @@ func (w *writer) balance(r *rig.Rig, b *ride.Balance) {
 	w.number("steepest_grade_held", float64(b.SteepestGrade))
 }
 
+func (w *writer) start(r *rig.Rig, s *ride.Start) {
+	w.open("start", '{')
+	w.flag("ok", s.OK)
+	if s.OK {
+		w.null("stopped_by")
+	} else {
+		w.text("stopped_by", s.StoppedBy.String())
+	}
+	w.text("gear", r.Gears[s.Gear].Label)
+	w.flag("in_the_gear_it_rides", s.InGear)
+	w.number("pull_wanted_n", s.WantedN)
+	w.number("pull_available_n", s.PullN)
+	w.flag("can_be_pushed", s.PushOK)
+	w.close('}')
+}
+
+func (w *writer) wayDown(d *ride.WayDown) {
+	w.open("way_down", '{')
+	if d.Falls {
+		w.number("brake_peak_c", math.Max(d.FrontPeakC, d.RearPeakC))
+		w.number("front_brake_peak_c", d.FrontPeakC)
+		w.number("rear_brake_peak_c", d.RearPeakC)
+		w.number("speed_not_to_exceed_mps", d.MostMps)
+		w.number("stopping_m", d.StoppingM)
+		w.number("deceleration_mps2", d.DecelMps2)
+		w.number("steepest_grade", float64(d.SteepestGrade))
+	} else {
+		for _, key := range []string{"brake_peak_c", "front_brake_peak_c", "rear_brake_peak_c", "speed_not_to_exceed_mps", "stopping_m", "deceleration_mps2", "steepest_grade"} {
+			w.null(key)
+		}
+	}
+	w.close('}')
+}
+
 func (w *writer) running(r *rig.Rig, run *ride.Running, moves bool) {
 	if !moves {
-		for _, key := range []string{"speed_mps", "gear", "cadence_rpm", "rider_power_w", "motor_power_w", "speed_set_by"} {
+		for _, key := range []string{"speed_mps", "gear", "cadence_rpm", "rider_power_w", "motor_power_w", "motor_efficiency", "speed_set_by"} {
 			w.null(key)
 		}
 		return
@@ -107,6 +159,7 @@ func (w *writer) running(r *rig.Rig, run *ride.Running, moves bool) {
 	w.number("cadence_rpm", run.CadenceRPM)
 	w.number("rider_power_w", run.RiderW)
 	w.number("motor_power_w", run.MotorW)
+	w.number("motor_efficiency", run.MotorEfficiency)
 	w.text("speed_set_by", run.SetBy.String())
 }
 
@@ -163,6 +216,11 @@ func (w *writer) close(bracket byte) {
 func (w *writer) text(name, value string) {
 	w.key(name)
 	w.out = appendText(w.out, value)
+}
+
+func (w *writer) flag(name string, v bool) {
+	w.key(name)
+	w.out = strconv.AppendBool(w.out, v)
 }
 
 func (w *writer) null(name string) {

@@ -19,7 +19,7 @@ func TestConstantPullThenConstantPower(t *testing.T) {
 			t.Errorf("closed form gives %.3f s, the figure is %.2f", closed, row.seconds)
 		}
 		length := mass*v1*v1/(2*row.pullN) + mass*(v*v*v-v1*v1*v1)/(3*watts)
-		a, err := Climb(pusher(row.pullN, watts), road(length, 0), Options{DownMps: 100})
+		a, err := Climb(pusher(row.pullN, watts), made(length, 0), Options{DownMps: 100, Charge: 1})
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -27,8 +27,8 @@ func TestConstantPullThenConstantPower(t *testing.T) {
 		if math.Abs(end/v-1) > 1e-4 {
 			t.Errorf("%g N: %.5f m/s after %.2f m, want %g", row.pullN, end, length, v)
 		}
-		if math.Abs(a.TimeS/closed-1) > 1e-3 {
-			t.Errorf("%g N: %.4f s, want %.4f", row.pullN, a.TimeS, closed)
+		if math.Abs(a.ClimbS/closed-1) > 1e-3 {
+			t.Errorf("%g N: %.4f s, want %.4f", row.pullN, a.ClimbS, closed)
 		}
 	}
 }
@@ -41,7 +41,7 @@ func TestPowerDecidesHowFast(t *testing.T) {
 		for _, row := range []struct{ percent, mps float64 }{{7, 3.65}, {22, 1.19}} {
 			at := At(unit.Percent(row.percent), 0)
 			r.Rider.HoldMps = 0.5
-			run, ok := Settle(r, at, 100)
+			run, ok := Settle(r, at, fresh(r), 100)
 			if !ok || math.Abs(run.SpeedMps-row.mps) > 0.006 {
 				t.Errorf("%g N on %g %%: %.4f m/s, want %.2f", pullN, row.percent, run.SpeedMps, row.mps)
 			}
@@ -57,28 +57,28 @@ func TestPowerDecidesHowFast(t *testing.T) {
 func TestPullDecidesHowSteep(t *testing.T) {
 	for _, row := range []struct{ pullN, percent float64 }{{210, 21.94}, {71, 7.26}} {
 		r := pusher(row.pullN*unit.Gravity/9.8, 5000)
-		b := Weigh(r, At(0.05, 0))
+		b := Weigh(r, At(0.05, 0), fresh(r))
 		if got := float64(b.SteepestGrade) * 100; math.Abs(got-row.percent) > 0.01 {
 			t.Errorf("%g N hold %.3f %%, want %.2f", row.pullN, got, row.percent)
 		}
 	}
 }
 
-// On an endless grade the simulation ends where the steady state says.
+// On a long grade the simulation ends where the steady state says, for the
+// state of heat, charge and legs in which it ends.
 func TestSimulationEndsInTheSteadyState(t *testing.T) {
 	r := trekking().rig()
-	for percent := -12.0; percent <= 27; percent++ {
-		s := Steady(r, unit.Percent(percent), usual.DownMps)
-		a, err := Climb(r, road(4000, percent), usual)
-		if err != nil || a.Stalled != !s.Held {
-			t.Fatalf("%g %%: %v, stalled %v, steady state holds %v", percent, err, a.Stalled, s.Held)
+	for percent := -12.0; percent <= 21; percent++ {
+		tour := newTour(r, made(2500, percent), usual)
+		tour.opt.StepScale = 1
+		tour.run.opt.StepScale = 1
+		tour.ride()
+		run, held := Settle(r, At(unit.Percent(percent), 0), &tour.run.body, usual.DownMps)
+		if tour.run.stalled || !held {
+			t.Fatalf("%g %%: stalled %v, steady state holds %v", percent, tour.run.stalled, held)
 		}
-		last := len(a.Trace.SpeedMps) - 1
-		if v := a.Trace.SpeedMps[last]; s.Held && math.Abs(v/s.Running.SpeedMps-1) > 0.002 {
-			t.Errorf("%g %%: simulation runs %.4f m/s, steady state %.4f", percent, v, s.Running.SpeedMps)
-		}
-		if s.Verdict != a.Verdict {
-			t.Errorf("%g %%: steady state says %v, simulation %v", percent, s.Verdict, a.Verdict)
+		if v := tour.run.speed(); math.Abs(v/run.SpeedMps-1) > 0.002 {
+			t.Errorf("%g %%: simulation runs %.4f m/s, steady state %.4f", percent, v, run.SpeedMps)
 		}
 	}
 }
@@ -86,11 +86,11 @@ func TestSimulationEndsInTheSteadyState(t *testing.T) {
 // What the steepest grade holds, it holds; a little more, it does not.
 func TestSteepestGradeIsTheEdge(t *testing.T) {
 	r := trekking().rig()
-	edge := Weigh(r, At(0, 0)).SteepestGrade
-	if s := Steady(r, edge-0.0005, usual.DownMps); !s.Held {
+	edge := Weigh(r, At(0, 0), fresh(r)).SteepestGrade
+	if s := Steady(r, edge-0.0005, usual); !s.Held {
 		t.Errorf("does not hold %v, just below its steepest grade", edge-0.0005)
 	}
-	if s := Steady(r, edge+0.0005, usual.DownMps); s.Held {
+	if s := Steady(r, edge+0.0005, usual); s.Held {
 		t.Errorf("holds %v, just above its steepest grade", edge+0.0005)
 	}
 }

@@ -20,7 +20,14 @@ type shifter struct {
 	gear, from int
 	leftS      float64 // of the shift under way
 	sinceS     float64 // since the last one
-	wish       []int   // best gear by speed, in steps of wishStep; −1 not yet known
+	table      *gearTable
+}
+
+// gearTable keeps the best gear by speed, in steps of wishStep; −1 where it is
+// not yet known. It holds for limits like those it was made for.
+type gearTable struct {
+	wish [wishes]int8
+	now  rig.Now
 }
 
 const (
@@ -28,26 +35,44 @@ const (
 	wishes   = 128
 )
 
-func newShifter(r *rig.Rig, startMps float64) shifter {
-	s := shifter{from: -1, sinceS: restS, wish: make([]int, wishes)}
-	for i := range s.wish {
-		s.wish[i] = -1
-	}
+func newShifter(r *rig.Rig) shifter {
+	return shifter{from: -1, sinceS: restS, table: &gearTable{}}
+}
+
+// start takes the gear for a speed at the foot.
+func (s *shifter) start(r *rig.Rig, startMps float64, body *rig.Body) {
+	s.table.renew(r, body)
 	s.gear = s.best(r, math.Max(startMps, r.Rider.HoldMps/2))
-	return s
+}
+
+func (t *gearTable) renew(r *rig.Rig, body *rig.Body) {
+	t.now = r.At(body, 0, 1)
+	for i := range t.wish {
+		t.wish[i] = -1
+	}
+}
+
+// stale tells that heat, charge or legs have changed what gears are worth.
+func (t *gearTable) stale(now *rig.Now) bool {
+	return math.Abs(now.Ease-t.now.Ease) > 0.05 ||
+		math.Abs(now.PackW-t.now.PackW) > 0.1*t.now.PackW ||
+		math.Abs(now.RiderW-t.now.RiderW) > 0.1*t.now.RiderW
 }
 
 func (s *shifter) best(r *rig.Rig, v float64) int {
 	i := min(int(v/wishStep), wishes-1)
-	if s.wish[i] < 0 {
-		s.wish[i] = r.BestGear((float64(i) + 0.5) * wishStep)
+	if s.table.wish[i] < 0 {
+		s.table.wish[i] = int8(r.BestGear((float64(i)+0.5)*wishStep, &s.table.now))
 	}
-	return s.wish[i]
+	return int(s.table.wish[i])
 }
 
 // choose begins a shift where one is wanted.
-func (s *shifter) choose(r *rig.Rig, v float64) {
-	if s.wants(r, v) {
+func (s *shifter) choose(r *rig.Rig, v float64, body *rig.Body, now *rig.Now) {
+	if s.table.stale(now) {
+		s.table.renew(r, body)
+	}
+	if s.wants(r, v, now) {
 		s.from, s.gear = s.gear, s.best(r, v)
 		s.leftS, s.sinceS = r.Bike.ShiftS, 0
 	}
@@ -55,7 +80,7 @@ func (s *shifter) choose(r *rig.Rig, v float64) {
 
 // wants tells whether the rider would shift now: where another gear pulls
 // enough more, or suits the legs better, or the cadence has left their range.
-func (s *shifter) wants(r *rig.Rig, v float64) bool {
+func (s *shifter) wants(r *rig.Rig, v float64, now *rig.Now) bool {
 	if s.under() || s.sinceS < restS {
 		return false
 	}
@@ -67,20 +92,14 @@ func (s *shifter) wants(r *rig.Rig, v float64) bool {
 	if to == s.from {
 		need, nearer = backAgain, 3*legs
 	}
-	return r.PullAt(v, to).Sum() >= need*r.PullAt(v, s.gear).Sum() ||
-		s.offLiked(r, v, s.gear)-s.offLiked(r, v, to) >= nearer ||
-		!s.suits(r, v)
+	return !s.suits(r, v) ||
+		r.OffLiked(v, s.gear)-r.OffLiked(v, to) >= nearer ||
+		r.PullAt(v, to, now).Sum() >= need*r.PullAt(v, s.gear, now).Sum()
 }
 
 func (s *shifter) suits(r *rig.Rig, v float64) bool {
 	c := r.CadenceAt(v, s.gear)
 	return c >= r.Rider.CadenceLow && c <= r.Rider.CadenceHigh
-}
-
-// offLiked is how far the cadence of a gear lies from the liked one, as a
-// logarithm of their ratio.
-func (s *shifter) offLiked(r *rig.Rig, v float64, gear int) float64 {
-	return math.Abs(math.Log(math.Max(r.CadenceAt(v, gear), 1) / r.Rider.CadenceLiked))
 }
 
 // under tells whether a shift is under way.
@@ -113,4 +132,9 @@ func (s *shifter) pass(dt float64) {
 	if s.leftS < 1e-6 {
 		s.leftS = 0
 	}
+}
+
+// rest is a stop: time to take an easy gear for the start.
+func (s *shifter) rest() {
+	s.gear, s.from, s.leftS, s.sinceS = 0, -1, 0, restS
 }

@@ -1,6 +1,7 @@
 // Package rig puts a bike, a rider, a load and a day together and tells what
 // the whole can pull at a speed, limit by limit. Start with New, then
-// Rig.Pegs for the limits and Rig.Load for what the road wants.
+// Rig.Fresh and Rig.At for the state it is in, Rig.Pegs for the limits and
+// Rig.Road for what the road wants.
 package rig
 
 import (
@@ -8,47 +9,24 @@ import (
 	"math"
 
 	"hillwright/physics/air"
+	"hillwright/physics/assume"
+	"hillwright/physics/brake"
 	"hillwright/physics/gear"
 	"hillwright/physics/motor"
+	"hillwright/physics/pack"
 	"hillwright/physics/rider"
 	"hillwright/physics/road"
 	"hillwright/physics/rule"
 	"hillwright/physics/unit"
 )
 
-// Bike is a bike as the shop knows it. MassKg with pack and motor [kg]; Crr
-// coefficient of rolling resistance; CdAM2 drag area with a rider in the usual
-// posture [m²]; WheelDragM2 the wheels' rotational drag [m²];
-// WheelInertiaKgM2 both wheels' moment of inertia [kg·m²]; RolloutM a measured
-// roll-out [m], NaN when there is none and the tyre decides; PackWh the pack's
-// energy [Wh]; ShiftS the time without pull that a shift takes [s].
-type Bike struct {
-	ID, Name         string
-	MassKg           float64
-	Crr              float64
-	CdAM2            float64
-	WheelDragM2      float64
-	WheelInertiaKgM2 float64
-	Tyre             gear.Tyre
-	RolloutM         float64
-	Train            gear.Train
-	ShiftS           float64
-	Motor            motor.Motor
-	PackWh           float64
-}
-
-// Load is what the bike carries besides the rider: mass [kg] and added drag
-// area [m²].
-type Load struct {
-	ID, Name string
-	MassKg   float64
-	CdAM2    float64
-}
-
-// Day is the weather. Humidity 0 to 1. AltitudeM NaN: the hill's own height
-// (or sea level). DensityKgM3 NaN: computed. WindMps with WindFromDeg NaN
-// blows against the rider all the way; otherwise from that direction
-// [° clockwise from north] wherever the road's bearing is known.
+// Day is the weather and what it makes of the road. Humidity 0 to 1. AltitudeM
+// NaN: the hill's own height (or sea level). DensityKgM3 NaN: computed. WindMps
+// with WindFromDeg NaN blows against the rider all the way; otherwise from that
+// direction [° clockwise from north] wherever the road's bearing is known.
+// Ground is the id of what the road is made of, wet or dry; Mu the friction
+// coefficient where it is known better, NaN otherwise. PackC is the pack's
+// temperature [°C], NaN: the day's.
 type Day struct {
 	ID, Name     string
 	TemperatureC unit.Celsius
@@ -57,40 +35,9 @@ type Day struct {
 	DensityKgM3  float64
 	WindMps      float64
 	WindFromDeg  float64
-}
-
-// Limit is one thing that holds a bike back.
-type Limit uint8
-
-// The limits, in the order in which the page explains them.
-const (
-	Torque   Limit = iota // the motor's torque through this gear
-	Power                 // the motor's power at this speed
-	Rider                 // the rider's effort times the assist level
-	CutOff                // the law's speed limit on assistance
-	Cadence               // the crank motor's cadence range
-	Coasting              // the road drives and nobody pedals: not a limit on pull
-	Limits                // how many there are
-)
-
-var limitNames = [Limits]string{"torque", "power", "rider", "cut-off", "cadence", "coasting"}
-
-// String is the limit's name in files and on the command line.
-func (l Limit) String() string { return limitNames[l] }
-
-// Pegs holds, for each limit, the pull at the tyre [N] that this limit alone
-// would allow at one speed in one gear; +Inf where it does not limit there.
-type Pegs [Limits]float64
-
-// Least gives the limit that allows the least and its pull [N].
-func (p *Pegs) Least() (Limit, float64) {
-	at := Limit(0)
-	for l := Limit(1); l < Limits; l++ {
-		if p[l] < p[at] {
-			at = l
-		}
-	}
-	return at, p[at]
+	Ground       string
+	Mu           float64
+	PackC        float64
 }
 
 // Rig is a bike with rider and load on a day, made ready for computing.
@@ -110,24 +57,49 @@ type Rig struct {
 	InertialKg float64
 	Road       road.Load
 
+	Circuit   motor.Circuit
+	Heat      motor.Heat
+	Pack      pack.Pack
+	PackC     float64 // the cells' temperature [°C]
+	Endurance rider.Endurance
+	Stance    road.Stance
+	Mu        float64
+	Wet       bool
+	Front     brake.Kind
+	Rear      brake.Kind
+	Brakes    brake.Pair
+	// Assumed lists the class defaults that stand in for what no sheet gave, by
+	// the paths of the question's inputs.
+	Assumed []assume.Value
+
 	factor float64   // the level's motor power per rider power
 	crank  []float64 // crank angle per road, by gear [rad/m]
 }
 
+// What can be wrong with the parts of a rig.
+var (
+	ErrLevel  = errors.New("the motor has no such assist level")
+	ErrGears  = errors.New("the bike has no gear: give it at least one chainring and one sprocket")
+	ErrBrakes = errors.New("the bike has no brake that is known: give it a front or a rear one")
+	ErrGround = errors.New("the road's ground is not known")
+)
+
 // New makes a rig. altitudeM is where the day's altitude is not given [m]. It
-// fails where the parts cannot make a bike that rides: no gear, no mass, a
-// level that the motor does not have.
+// fails where the parts cannot make a bike that rides: no gear, no brake, a
+// level that the motor does not have, a ground that is not known.
 func New(b Bike, r rider.Rider, cargo Load, d Day, law rule.Law, level int, altitudeM float64) (*Rig, error) {
 	g := &Rig{Bike: b, Rider: r, Cargo: cargo, Day: d, Law: law, Level: level}
-	g.Gears = b.Train.Gears()
-	if len(g.Gears) == 0 {
-		return nil, errors.New("the bike has no gear: give it at least one chainring and one sprocket")
+	if g.Gears = b.Train.Gears(); len(g.Gears) == 0 {
+		return nil, ErrGears
 	}
-	if b.Motor.Kind != motor.None && (level < 0 || level > len(b.Motor.Levels)) {
+	if b.Motor.Kind == motor.None {
+		g.Level = 0
+	}
+	if g.Level < 0 || g.Level > len(b.Motor.Levels) {
 		return nil, ErrLevel
 	}
-	if b.Motor.Kind != motor.None && level > 0 {
-		g.factor = b.Motor.Levels[level-1]
+	if g.Level > 0 {
+		g.factor = b.Motor.Levels[g.Level-1]
 	}
 	g.CircumferenceM = b.RolloutM
 	if math.IsNaN(b.RolloutM) {
@@ -148,11 +120,46 @@ func New(b Bike, r rider.Rider, cargo Load, d Day, law rule.Law, level int, alti
 	for i, each := range g.Gears {
 		g.crank[i] = 2 * math.Pi / each.Development(g.CircumferenceM)
 	}
-	return g, nil
+	return g, g.complete(radius)
 }
 
-// ErrLevel says that the motor has no such assist level.
-var ErrLevel = errors.New("the motor has no such assist level")
+// complete works out what stands behind the sheet: circuit, heat, pack, the
+// legs, the stance on the wheels, the ground, the brakes.
+func (g *Rig) complete(radiusM float64) error {
+	b, d := &g.Bike, &g.Day
+	var more []assume.Value
+	g.Circuit, g.Heat, g.Assumed = b.circuit(radiusM, g.Law.SpeedMps)
+	prefix(g.Assumed, "bike.motor.")
+	g.Pack, more = b.packed()
+	prefix(more, "bike.pack.")
+	g.Assumed = append(g.Assumed, more...)
+	g.PackC = d.PackC
+	if math.IsNaN(d.PackC) {
+		g.PackC = float64(d.TemperatureC)
+	}
+	g.Endurance = rider.Endurance{CriticalW: g.Rider.CriticalW, ReserveJ: g.Rider.ReserveJ}
+	g.Stance = b.stance(g.Rider.MassKg, g.Cargo)
+	ground, ok := road.GroundByID(d.Ground)
+	if !ok {
+		return ErrGround
+	}
+	g.Mu, g.Wet = ground.Mu.Usual, ground.Wet
+	if !math.IsNaN(d.Mu) {
+		g.Mu = d.Mu
+	}
+	var err error
+	if g.Front, g.Rear, err = b.brakes(); err != nil {
+		return err
+	}
+	g.Brakes = brake.NewPair(g.Front, g.Rear, b.FrontBrakeShare)
+	return nil
+}
+
+func prefix(list []assume.Value, path string) {
+	for i := range list {
+		list[i].Path = path + list[i].Path
+	}
+}
 
 func density(d Day, altitudeM float64) float64 {
 	if !math.IsNaN(d.DensityKgM3) {
@@ -168,3 +175,6 @@ func density(d Day, altitudeM float64) float64 {
 func (g *Rig) CadenceAt(speedMps float64, gear int) float64 {
 	return speedMps * g.crank[gear] * 30 / math.Pi
 }
+
+// Assists tells whether a motor is there and switched on.
+func (g *Rig) Assists() bool { return g.Level > 0 }
