@@ -58,7 +58,7 @@ func showStaff(section *dom.Node, s Staff) {
 			kept = append(kept, a)
 		}
 	}
-	staff.Attrs = append(kept, dom.With("transform", s.Transform()))
+	staff.Attrs = append(kept, dom.Attr{Name: "transform", Value: s.Transform()})
 }
 
 // TestPreview writes pages with pictures to look at: set PICTURES_DIR and open
@@ -104,6 +104,11 @@ func TestPreview(t *testing.T) {
 			}
 			put(Hatches())
 			put(Legend(metric))
+			many := weighed(330, 240, 300, 310, 345, 400, 420, 470, 520, 1900)
+			b.WriteString("<div class=row>")
+			put(Balance(&many, size, german, own))
+			put(Balance(&many, size, imperial, BalanceOptions{WantedN: 100}))
+			b.WriteString("</div>")
 			for i, h := range hills {
 				p, a, r, down := real(t, h.sections, h.set...)
 				b.WriteString("<div class=row>")
