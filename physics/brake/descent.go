@@ -95,7 +95,7 @@ func (p *Pair) Peak(d *Descent, speedMps float64) Peak {
 	front, rear := d.FrontC, d.RearC
 	peak := Peak{FrontC: front, RearC: rear}
 	frontShare, rearShare := p.FrontShare, 1-p.FrontShare
-	air := math.Abs(speedMps + d.HeadMps)
+	air := speedMps + d.HeadMps
 	atM := 0.0
 	for i := range d.Pieces {
 		piece := &d.Pieces[i]

@@ -88,6 +88,36 @@ func TestPeakSaysWhere(t *testing.T) {
 	}
 }
 
+// A wind from behind that is faster than the rider pushes and cools.
+func TestTailWind(t *testing.T) {
+	d := hill(0.1, 100, 1)
+	d.HeadMps = -10
+	drive := d.Pieces[0].DriveN
+	if got, want := d.HoldW(drive, 4), (drive+d.DragN*36)*4; math.Abs(got-want) > 1e-9 {
+		t.Errorf("%.6f W hold 4 m/s with 10 m/s from behind, want %.6f", got, want)
+	}
+	p := discs(t)
+	if got := p.Peak(&d, 4); math.IsNaN(got.FrontC) {
+		t.Error("a wind from behind has no temperature")
+	}
+}
+
+// Either brake alone is enough for a caution, and for too much.
+func TestEitherBrakeCounts(t *testing.T) {
+	p := NewPair(kind(t, "hydraulic-160"), kind(t, "rim"), 0.6)
+	for _, row := range []struct {
+		front, rear     float64
+		cautious, bears bool
+	}{
+		{199, 79, false, true}, {201, 79, true, true}, {199, 81, true, true}, {251, 79, true, false}, {199, 91, true, false},
+	} {
+		k := Peak{FrontC: row.front, RearC: row.rear}
+		if p.Cautious(k) != row.cautious || p.Bears(k) != row.bears {
+			t.Errorf("%g and %g °C: cautious %v, bears %v", row.front, row.rear, p.Cautious(k), p.Bears(k))
+		}
+	}
+}
+
 func TestSpeedByHeat(t *testing.T) {
 	for _, row := range []struct {
 		name     string
