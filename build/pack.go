@@ -30,6 +30,9 @@ func Pack(parts Parts, out string) (*Report, error) {
 	if err != nil {
 		return nil, err
 	}
+	if err := page.compress(); err != nil {
+		return nil, err
+	}
 	report := weigh(page, parts.Budget)
 	if err := report.check(); err != nil {
 		return report, err
@@ -37,7 +40,7 @@ func Pack(parts Parts, out string) (*Report, error) {
 	return report, write(page, out)
 }
 
-// Assemble makes the page in memory, compressed siblings included.
+// Assemble makes the page in memory, without the compressed siblings.
 func Assemble(parts Parts) (*Page, error) {
 	own := parts.Shop
 	p := &Page{files: map[string]*File{}}
@@ -51,10 +54,7 @@ func Assemble(parts Parts) (*Page, error) {
 	if err := p.addIndex(parts.Site, own.Shop, names); err != nil {
 		return nil, err
 	}
-	if err := p.addServiceWorker(parts.Site); err != nil {
-		return nil, err
-	}
-	return p, p.compress()
+	return p, p.addServiceWorker(parts.Site)
 }
 
 // addHashed adds every file that bears its content's hash in its name, and

@@ -50,7 +50,11 @@ var one = sync.OnceValues(func() (*Page, error) {
 	if err != nil {
 		return nil, err
 	}
-	return Assemble(p)
+	page, err := Assemble(p)
+	if err != nil {
+		return nil, err
+	}
+	return page, page.compress()
 })
 
 func assemble(t testing.TB) *Page {

@@ -117,10 +117,14 @@
   async function keepForOffline() {
     if (!navigator.serviceWorker) return;
     const container = navigator.serviceWorker;
-    let hadOne = Boolean(container.controller);
+    // The first one of ours takes over without a word; the page may have been
+    // held by that of a folder above until then.
+    const ours = new URL("sw.js", location.href).href;
+    const held = () => Boolean(container.controller) && container.controller.scriptURL === ours;
+    let before = held();
     container.addEventListener("controllerchange", () => {
-      if (hadOne) location.reload();
-      hadOne = true;
+      if (before) location.reload();
+      before = held();
     });
     const registration = await container.register("sw.js", { scope: "./", updateViaCache: "none" });
     const offer = () => {

@@ -1,13 +1,13 @@
 // worker.js runs the page's program a second time, beside the page, for long
 // work. The first message brings the compiled module and the address of Go's
 // script. Messages that come before the program listens are kept in
-// hillwrightEarly: take them, then set it to null.
+// hillwrightEarly: listen, take those, then set it to null.
 "use strict";
 
 self.hillwrightWorker = true;
 self.hillwrightEarly = [];
 
-self.addEventListener("message", async function first({ data }) {
+self.addEventListener("message", function first({ data }) {
   self.removeEventListener("message", first);
   self.addEventListener("message", function keep(event) {
     if (self.hillwrightEarly) self.hillwrightEarly.push(event.data);

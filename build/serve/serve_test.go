@@ -12,7 +12,7 @@ import (
 	"testing/fstest"
 )
 
-func page() fstest.MapFS {
+func small() fstest.MapFS {
 	return fstest.MapFS{
 		"index.html":                          {Data: []byte("<p>page")},
 		"index.html.gz":                       {Data: []byte("zipped page")},
@@ -58,7 +58,7 @@ func TestHandler(t *testing.T) {
 			r := httptest.NewRequest(each.method, "http://host"+each.path, nil)
 			r.URL.Path = each.path
 			r.Header.Set("Accept-Encoding", each.accept)
-			Handler(page(), "/shop/bikes/").ServeHTTP(w, r)
+			Handler(small(), "/shop/bikes/").ServeHTTP(w, r)
 			if w.Code != each.status {
 				t.Fatalf("got status %d, want %d", w.Code, each.status)
 			}
@@ -84,7 +84,7 @@ func TestHandler(t *testing.T) {
 }
 
 func TestNotModified(t *testing.T) {
-	h := Handler(page(), "/")
+	h := Handler(small(), "/")
 	first := httptest.NewRecorder()
 	h.ServeHTTP(first, httptest.NewRequest("GET", "/sw.js", nil))
 	again := httptest.NewRequest("GET", "/sw.js", nil)
@@ -102,7 +102,7 @@ func TestRun(t *testing.T) {
 	ctx, cancel := context.WithCancel(t.Context())
 	read, write := io.Pipe()
 	ended := make(chan error, 1)
-	go func() { ended <- Run(ctx, "127.0.0.1:0", "/a/", page(), write) }()
+	go func() { ended <- Run(ctx, "127.0.0.1:0", "/a/", small(), write) }()
 	line, err := bufio.NewReader(read).ReadString('\n')
 	if err != nil {
 		t.Fatal(err)
@@ -133,7 +133,7 @@ func TestRunWhereThePortIsTaken(t *testing.T) {
 		t.Fatal(err)
 	}
 	defer taken.Close()
-	err = Run(t.Context(), taken.Addr().String(), "/", page(), io.Discard)
+	err = Run(t.Context(), taken.Addr().String(), "/", small(), io.Discard)
 	if err == nil || !strings.Contains(err.Error(), "-addr") {
 		t.Errorf("got %v, want an error that names -addr", err)
 	}

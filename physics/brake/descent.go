@@ -6,12 +6,14 @@ import (
 	"hillwright/physics/unit"
 )
 
-// Pair is a bike's two brakes with the temperatures at which a rider should be
-// told [°C]. FrontShare is the part of the braking that the front one does
+// Pair is a bike's two brakes. The cautions are the temperatures at which a
+// rider should be told, the mosts those that a speed not to exceed must not
+// lead to [°C]. FrontShare is the part of the braking that the front one does
 // [0 to 1]. Start with NewPair.
 type Pair struct {
 	Front, Rear                 Sink
 	FrontCautionC, RearCautionC float64
+	FrontMostC, RearMostC       float64
 	FrontShare                  float64
 }
 
@@ -21,18 +23,21 @@ type Pair struct {
 func FrontShare() unit.Band { return unit.Band{Low: 0.40, Usual: 0.60, High: 0.75} }
 
 // NewPair puts a front and a rear brake together. Where one is of kind "none"
-// the other does all, whatever the share. One of the two must be there.
+// the other does all, whatever the share. One of the two must be there. The
+// most is the low end of the fade's band: where the first brake of its kind may
+// have lost half its force.
 func NewPair(front, rear Kind, frontShare float64) Pair {
 	p := Pair{
 		Front: front.Sink(), Rear: rear.Sink(),
 		FrontCautionC: front.CautionC.Usual, RearCautionC: rear.CautionC.Usual,
+		FrontMostC: front.FadeC.Low, RearMostC: rear.FadeC.Low,
 		FrontShare: frontShare,
 	}
 	if front.None() {
-		p.FrontShare, p.FrontCautionC = 0, math.Inf(1)
+		p.FrontShare, p.FrontCautionC, p.FrontMostC = 0, math.Inf(1), math.Inf(1)
 	}
 	if rear.None() {
-		p.FrontShare, p.RearCautionC = 1, math.Inf(1)
+		p.FrontShare, p.RearCautionC, p.RearMostC = 1, math.Inf(1), math.Inf(1)
 	}
 	return p
 }
@@ -90,7 +95,7 @@ func (p *Pair) Peak(d *Descent, speedMps float64) Peak {
 	front, rear := d.FrontC, d.RearC
 	peak := Peak{FrontC: front, RearC: rear}
 	frontShare, rearShare := p.FrontShare, 1-p.FrontShare
-	air := math.Abs(speedMps + d.HeadMps)
+	air := speedMps + d.HeadMps
 	atM := 0.0
 	for i := range d.Pieces {
 		piece := &d.Pieces[i]
@@ -115,8 +120,11 @@ func (k *Peak) see(frontC, rearC, atM float64) {
 	}
 }
 
-// Cool tells that neither brake reached its caution.
-func (p *Pair) Cool(k Peak) bool { return k.FrontC <= p.FrontCautionC && k.RearC <= p.RearCautionC }
+// Cautious tells that a brake got warm enough for the rider to be told.
+func (p *Pair) Cautious(k Peak) bool { return k.FrontC > p.FrontCautionC || k.RearC > p.RearCautionC }
+
+// Bears tells that neither brake got warmer than its most.
+func (p *Pair) Bears(k Peak) bool { return k.FrontC <= p.FrontMostC && k.RearC <= p.RearMostC }
 
 // slowest is where the search begins [m/s]: below it one walks. scan is its
 // stride [m/s].
@@ -127,12 +135,12 @@ const (
 
 // SpeedByHeat is the speed not to exceed because of the brakes [m/s]: the
 // highest speed, up to mostMps, such that at it and at every lower one both
-// brakes stay below their caution all the way down with one stop anywhere. Much
+// brakes stay below their most all the way down with one stop anywhere. Much
 // faster the air may do the braking and the brakes stay cool again; that is no
 // advice to give, so the first speed that is too warm ends it. 0 means not even
 // 1 m/s: stop and let them cool, or walk.
 func (p *Pair) SpeedByHeat(d *Descent, mostMps float64) float64 {
-	if mostMps < slowest || !p.Cool(p.Peak(d, slowest)) {
+	if mostMps < slowest || !p.Bears(p.Peak(d, slowest)) {
 		return 0
 	}
 	cool, warm := slowest, mostMps
@@ -141,7 +149,7 @@ func (p *Pair) SpeedByHeat(d *Descent, mostMps float64) float64 {
 		if next > warm {
 			next = warm
 		}
-		if !p.Cool(p.Peak(d, next)) {
+		if !p.Bears(p.Peak(d, next)) {
 			warm = next
 			break
 		}
@@ -149,7 +157,7 @@ func (p *Pair) SpeedByHeat(d *Descent, mostMps float64) float64 {
 	}
 	for warm-cool > 1e-6*warm {
 		middle := (cool + warm) / 2
-		if p.Cool(p.Peak(d, middle)) {
+		if p.Bears(p.Peak(d, middle)) {
 			cool = middle
 		} else {
 			warm = middle

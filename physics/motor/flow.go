@@ -35,7 +35,7 @@ func (c *Circuit) Draw(torqueNm, radPerS, windingC float64) Flow {
 // coast is the flow of a motor that is on and not driving.
 func (c *Circuit) coast(radPerS float64) Flow {
 	dragW := c.Drag(radPerS) * radPerS
-	return c.close(Flow{OutputW: -dragW, CaseW: dragW}, 0)
+	return c.close(Flow{OutputW: 0 - dragW, CaseW: dragW}, 0)
 }
 
 // close adds the controller's losses and what the pack gives for it all.

@@ -1,7 +1,5 @@
 package pack
 
-import "math"
-
 // Chemistry is the cells' kind, by its positive electrode.
 type Chemistry uint8
 
@@ -29,14 +27,14 @@ type curve [steps + 1]float64
 // at gives a curve's value at a charge, straight between the entries; charges
 // outside 0 to 1 are taken as the nearer end.
 func (c *curve) at(charge float64) float64 {
-	x := math.Min(math.Max(charge, 0), 1) * steps
+	x := min(max(charge, 0), 1) * steps
 	i := min(int(x), steps-1)
 	return c[i] + (x-float64(i))*(c[i+1]-c[i])
 }
 
 // under is the area below a curve from 0 to a charge within 0 to 1.
 func (c *curve) under(charge float64) float64 {
-	x := math.Min(math.Max(charge, 0), 1) * steps
+	x := min(max(charge, 0), 1) * steps
 	whole := min(int(x), steps-1)
 	sum := 0.0
 	for i := range whole {
@@ -65,14 +63,14 @@ var cells = [...]cell{
 			3.10, 3.35, 3.46, 3.52, 3.56, 3.59, 3.615, 3.64, 3.665, 3.69, 3.72,
 			3.755, 3.80, 3.845, 3.89, 3.935, 3.985, 4.03, 4.075, 4.12, 4.18,
 		},
-		nominalV: 3.6, fullV: 4.2, cutV: 3.0, ohmAh: 0.13, cycles: 600,
+		nominalV: 3.6, fullV: 4.2, cutV: 3.0, ohmAh: 0.105, cycles: 600,
 	},
 	IronPhosphate: {
 		openV: curve{
 			2.70, 3.05, 3.18, 3.21, 3.235, 3.25, 3.265, 3.275, 3.28, 3.285, 3.29,
 			3.295, 3.30, 3.305, 3.315, 3.325, 3.33, 3.333, 3.336, 3.345, 3.45,
 		},
-		nominalV: 3.2, fullV: 3.65, cutV: 2.5, ohmAh: 0.10, cycles: 1800,
+		nominalV: 3.2, fullV: 3.65, cutV: 2.5, ohmAh: 0.09, cycles: 1800,
 	},
 }
 
@@ -83,28 +81,27 @@ var lowCharge = curve{
 	1, 1, 1, 1, 1, 1, 1, 1, 1, 1,
 }
 
-// knot is one entry of a table over temperature.
-type knot struct{ celsius, value float64 }
+// cold is what temperature does to a cell [°C]: the share of its capacity that
+// it gives, and how much more it resists than at 25 °C.
+type cold struct{ celsius, capacity, ohm float64 }
 
-// ofCold gives a table's value at a cell temperature [°C], straight between the
-// entries; beyond the ends the end holds.
-func ofCold(table *[5]knot, cellC float64) float64 {
-	if cellC <= table[0].celsius {
-		return table[0].value
+// colds is the table of it. Capacity: a maker-neutral 18650 sheet, at 10 A per
+// cell (see CHECKS.md). A bike draws less per cell, so this errs on the careful
+// side. Resistance: common practice, no source.
+var colds = [...]cold{{-20, 0.60, 4.5}, {-10, 0.75, 3}, {0, 0.80, 2}, {25, 1, 1}, {60, 1, 0.75}}
+
+// coldAt gives capacity and resistance at a cell temperature [°C], straight
+// between the entries; beyond the ends the end holds.
+func coldAt(cellC float64) (capacity, ohm float64) {
+	if cellC <= colds[0].celsius {
+		return colds[0].capacity, colds[0].ohm
 	}
-	for i := 1; i < len(table); i++ {
-		if low, high := table[i-1], table[i]; cellC <= high.celsius {
-			return low.value + (cellC-low.celsius)/(high.celsius-low.celsius)*(high.value-low.value)
+	for i := 1; i < len(colds); i++ {
+		if low, high := &colds[i-1], &colds[i]; cellC <= high.celsius {
+			part := (cellC - low.celsius) / (high.celsius - low.celsius)
+			return low.capacity + part*(high.capacity-low.capacity), low.ohm + part*(high.ohm-low.ohm)
 		}
 	}
-	return table[len(table)-1].value
+	end := &colds[len(colds)-1]
+	return end.capacity, end.ohm
 }
-
-// coldCapacity is the share of its capacity that a cell gives. Source: a
-// maker-neutral 18650 sheet, at 10 A per cell (see CHECKS.md). A bike draws
-// less per cell, so this errs on the careful side.
-var coldCapacity = [5]knot{{-20, 0.60}, {-10, 0.75}, {0, 0.80}, {25, 1}, {60, 1}}
-
-// coldOhm is how much more a cell resists than at 25 °C. Common practice, no
-// source.
-var coldOhm = [5]knot{{-20, 4.5}, {-10, 3}, {0, 2}, {25, 1}, {60, 0.75}}

@@ -13,7 +13,8 @@ import "math"
 // the nearer end is taken.
 //
 // Valid for NominalWh, NominalV, Series, ResistanceOhm, RelaxS > 0, RelaxShare
-// ≥ 0, 0 < Health ≤ 1.
+// ≥ 0, 0 < Health ≤ 1. The zero Pack is a bike without one: it gives nothing,
+// takes nothing and stays at charge 0.
 type Pack struct {
 	Chemistry Chemistry
 	// NominalWh and NominalV are the energy [Wh] and voltage [V] on the label.
@@ -39,6 +40,8 @@ type Pack struct {
 // the resistance at 80 % health. Common practice, no source.
 const ageOhm = 3
 
+func (p *Pack) none() bool { return p.NominalWh <= 0 }
+
 // OpenV is the voltage at rest [V] at a charge.
 func (p *Pack) OpenV(charge float64) float64 {
 	return p.Series * cells[p.Chemistry].openV.at(charge)
@@ -47,13 +50,22 @@ func (p *Pack) OpenV(charge float64) float64 {
 // Resistance is the quick part of the pack's resistance [Ω] at a charge and a
 // cell temperature [°C].
 func (p *Pack) Resistance(charge, cellC float64) float64 {
-	return p.ResistanceOhm * (1 + ageOhm*(1-p.Health)) * ofCold(&coldOhm, cellC) * lowCharge.at(charge)
+	_, cold := coldAt(cellC)
+	return p.ohm(charge, cold)
+}
+
+func (p *Pack) ohm(charge, cold float64) float64 {
+	return p.ResistanceOhm * (1 + ageOhm*(1-p.Health)) * cold * lowCharge.at(charge)
 }
 
 // CapacityAh is the charge that the pack gives from full to empty [Ah] at a cell
 // temperature [°C].
 func (p *Pack) CapacityAh(cellC float64) float64 {
-	return p.NominalWh / p.NominalV * p.Health * ofCold(&coldCapacity, cellC)
+	if p.none() {
+		return 0
+	}
+	cold, _ := coldAt(cellC)
+	return p.NominalWh / p.NominalV * p.Health * cold
 }
 
 // OpenWh is the energy [Wh] between empty and a charge at a cell temperature
@@ -76,8 +88,12 @@ func (p *Pack) SettledRelaxV(charge, amps, cellC float64) float64 {
 // negative while charging] at a cell temperature [°C]. The slow part follows its
 // closed form, so no step is too long for it; charge stays within 0 to 1.
 func (p *Pack) Step(charge, relaxV, amps, cellC, seconds float64) (chargeThen, relaxVThen float64) {
-	settled := p.SettledRelaxV(charge, amps, cellC)
+	if p.none() {
+		return 0, 0
+	}
+	capacity, ohm := coldAt(cellC)
+	settled := p.RelaxShare * p.ohm(charge, ohm) * amps
 	relaxVThen = settled + (relaxV-settled)*math.Exp(-seconds/p.RelaxS)
-	chargeThen = charge - amps*seconds/(3600*p.CapacityAh(cellC))
-	return math.Min(math.Max(chargeThen, 0), 1), relaxVThen
+	chargeThen = charge - amps*seconds*p.NominalV/(3600*p.NominalWh*p.Health*capacity)
+	return min(max(chargeThen, 0), 1), relaxVThen
 }

@@ -45,11 +45,11 @@ func (p *Pack) Current(powerW, charge, relaxV, cellC float64) (amps float64, ok 
 
 // mostAmps is the most current [A] that the BMS and the cells allow.
 func (p *Pack) mostAmps(emf, ohm, charge float64) (float64, Bound) {
-	if charge <= 0 {
+	if charge <= 0 || p.none() {
 		return 0, ByCharge
 	}
 	// Beyond emf/2R more current gives less power.
-	byVoltage := math.Min(emf-p.CutV*p.Series, emf/2) / ohm
+	byVoltage := min(emf-p.CutV*p.Series, emf/2) / ohm
 	switch {
 	case byVoltage <= 0:
 		return 0, ByVoltage
@@ -61,11 +61,11 @@ func (p *Pack) mostAmps(emf, ohm, charge float64) (float64, Bound) {
 
 // mostChargeAmps is the most current [A, ≥ 0] that the pack takes.
 func (p *Pack) mostChargeAmps(emf, ohm, charge, cellC float64) float64 {
-	if charge >= 1 || cellC < warmEnough {
+	if charge >= 1 || cellC < warmEnough || p.none() {
 		return 0
 	}
 	byVoltage := (cells[p.Chemistry].fullV*p.Series - emf) / ohm
-	return math.Max(0, math.Min(p.MaxChargeA, byVoltage))
+	return max(0, min(p.MaxChargeA, byVoltage))
 }
 
 // MaxPower is the most power [W at the terminals] that the pack gives at this

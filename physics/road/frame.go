@@ -60,7 +60,8 @@ type Stance struct {
 }
 
 // Stand works out the stance of a bike and its trailer (the zero Trailer is
-// none). Frame.WheelbaseM must be > 0, and Trailer.PoleM too if it has mass.
+// none). Frame.WheelbaseM must be > 0, and Trailer.PoleM too if it has mass; of a
+// rig without mass nothing can be asked.
 func Stand(f Frame, t Trailer) Stance {
 	m, l := f.Mass.MassKg, f.WheelbaseM
 	s := Stance{MassKg: m + t.MassKg}

@@ -220,7 +220,6 @@ func (c *balance) gap() dom.Parts {
 	default:
 		l.x, l.anchor = from-8, fromEnd
 	}
-	l = l.clamp(4, c.size.W-4)
 	return dom.Parts{d.node(class), l.node()}
 }
 

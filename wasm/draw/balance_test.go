@@ -181,6 +181,18 @@ func TestBalanceTextCarriesTheFigures(t *testing.T) {
 	})
 }
 
+// The scale's figures keep apart at any end of the scale.
+func TestScaleFiguresKeepApart(t *testing.T) {
+	for w := 320.0; w < 800; w += 37 {
+		for most := 2.0; most < 200000; most *= 1.07 {
+			b := weighed(most/3, most/2)
+			for _, v := range voices {
+				checkPicture(t, Balance(&b, Size{w, 230}, v, own))
+			}
+		}
+	}
+}
+
 func BenchmarkBalance(b *testing.B) {
 	of := weighed(200, 300, 310, 400, 500, 600)
 	for b.Loop() {

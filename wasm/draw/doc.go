@@ -18,7 +18,7 @@
 //	hatch-ground       the ground between hatch lines (filled)
 //	hatch-line         hatch lines (stroked), of open and close ground
 //	hatch-solid        solid ground (filled), the accent
-//	ground-open, ground-close, ground-solid   ground by headroom (fill is set to the pattern)
+//	ground-open, ground-close, ground-solid   ground by headroom (the fill attribute is the pattern: leave fill alone)
 //	ground-beyond      ground beyond a stall: not ridden (filled, not hatched)
 //	road               the road's line (stroked, bold)
 //	ordinate           lines from the road down to the base line at the ticks (thin)

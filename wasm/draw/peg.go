@@ -61,7 +61,6 @@ func (c *balance) pegs() dom.Parts {
 		switch {
 		case passed:
 			breakPeg(&broken, f.x, c.barrel)
-			class = "words"
 		case first:
 			first = false
 			stem(&stems, f.x, c.barrel)

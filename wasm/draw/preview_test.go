@@ -49,6 +49,18 @@ var (
 	own      = BalanceOptions{WantedN: math.NaN()}
 )
 
+// showStaff moves the staff as the page does: by attributes only.
+func showStaff(section *dom.Node, s Staff) {
+	staff := classed(section, "staff")[0]
+	var kept []dom.Attr
+	for _, a := range staff.Attrs {
+		if a.Name != "visibility" {
+			kept = append(kept, a)
+		}
+	}
+	staff.Attrs = append(kept, dom.Attr{Name: "transform", Value: s.Transform()})
+}
+
 // TestPreview writes pages with pictures to look at: set PICTURES_DIR and open
 // the files, or take screenshots of them.
 func TestPreview(t *testing.T) {
@@ -92,10 +104,19 @@ func TestPreview(t *testing.T) {
 			}
 			put(Hatches())
 			put(Legend(metric))
+			many := weighed(330, 240, 300, 310, 345, 400, 420, 470, 520, 1900)
+			b.WriteString("<div class=row>")
+			put(Balance(&many, size, german, own))
+			put(Balance(&many, size, imperial, BalanceOptions{WantedN: 100}))
+			b.WriteString("</div>")
 			for i, h := range hills {
 				p, a, r, down := real(t, h.sections, h.set...)
 				b.WriteString("<div class=row>")
-				put(Section(p, a, size, h.voice))
+				section := Section(p, a, size, h.voice)
+				if i%2 == 0 {
+					showStaff(section, SectionAt(p, a, size, size.W*0.6))
+				}
+				put(section)
 				put(Balance(&a.Balance, size, h.voice, own))
 				if i == 0 {
 					put(Balance(&a.Balance, size, h.voice, BalanceOptions{WantedN: a.Balance.Pegs[0].PullN * 1.3}))

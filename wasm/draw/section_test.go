@@ -148,6 +148,9 @@ func TestSectionIsTrueToItsHeights(t *testing.T) {
 		if !strings.Contains(text, said) || math.Abs(up/along-math.Round(up/along)) > 1e-6 {
 			t.Fatalf("drawn ×%v, the picture says %q", up/along, text)
 		}
+		if wide := along * p.LengthM(); up/along > 1.5 && math.Abs(wide-(size.W-2*sectionSide)) > 1e-6 {
+			t.Fatalf("exaggerated, and yet only %v px of %v wide", wide, size.W)
+		}
 	})
 }
 
@@ -229,7 +232,7 @@ func TestSectionOfOddHills(t *testing.T) {
 				for _, size := range []Size{{320, 180}, {360, 220}, {700, 300}} {
 					checkPicture(t, Section(p, a, size, v))
 					for _, x := range []float64{-50, 0, 100, size.W, 9999} {
-						s := SectionAt(p, orEmpty(a), size, x)
+						s := SectionAt(p, a, size, x)
 						if math.IsNaN(s.X+s.Y+s.HeightM+s.AtM) || s.AtM < 0 || s.AtM > p.LengthM() {
 							t.Errorf("staff at %v: %+v", x, s)
 						}
@@ -244,13 +247,6 @@ func TestSectionOfOddHills(t *testing.T) {
 	if n := Section(&hill.Profile{}, nil, Size{360, 220}, metric); n == nil || n.Tag != "svg" {
 		t.Error("a profile without road has no picture")
 	}
-}
-
-func orEmpty(a *ride.Answer) *ride.Answer {
-	if a == nil {
-		return &ride.Answer{}
-	}
-	return a
 }
 
 func bench(t testing.TB) *rig.Rig {
@@ -300,6 +296,24 @@ func TestLongHillsAreThinned(t *testing.T) {
 	}
 	if len(high)+len(low) > 0 {
 		t.Errorf("thinning lost the highest of %d and the lowest of %d columns", len(high), len(low))
+	}
+}
+
+// Where the rig stops within the hardest stretch, both words stay near it.
+func TestWordsStayNear(t *testing.T) {
+	p, a := made([]float64{400, 60, 300}, []float64{0.07, 0.18, 0.02}, []float64{0.5, -0.2, 0.6}, 420)
+	for _, w := range []float64{340, 700} {
+		size := Size{w, 260}
+		s := newSection(p, a, size)
+		n := Section(p, a, size, metric)
+		checkPicture(t, n)
+		for _, w := range texts(n) {
+			if b := w.box; strings.Contains(w.text, "420") || strings.Contains(w.text, "·") {
+				if over := s.roof(b.x0, b.x1) - b.y1; over > 60 {
+					t.Errorf("%q stands %v px above the road", w.text, over)
+				}
+			}
+		}
 	}
 }
 

@@ -1,0 +1,118 @@
+//go:build js && wasm
+
+package device
+
+import (
+	"bytes"
+	"syscall/js"
+	"time"
+
+	"hillwright/physics/hill"
+	"hillwright/wasm/keep"
+)
+
+// IsWorker tells that this program runs beside a page, not in one.
+func IsWorker() bool { return js.Global().Get("hillwrightWorker").Truthy() }
+
+// Work answers the page's requests from beside it, for ever.
+func Work() {
+	requests := make(chan js.Value, 16)
+	listener := js.FuncOf(func(_ js.Value, args []js.Value) any {
+		requests <- args[0].Get("data")
+		return nil
+	})
+	js.Global().Call("addEventListener", "message", listener)
+	if early := js.Global().Get("hillwrightEarly"); given(early) {
+		for i := range early.Length() {
+			requests <- early.Index(i)
+		}
+	}
+	js.Global().Set("hillwrightEarly", js.Null())
+	for r := range requests {
+		answerRequest(r)
+	}
+}
+
+// tellEvery is how often progress is told.
+const tellEvery = 60 * time.Millisecond
+
+func answerRequest(request js.Value) {
+	id := request.Get("id").Int()
+	told := time.Now()
+	t := readTrack(bytesOf(request.Get("track")), func(part float64) bool {
+		if time.Since(told) > tellEvery {
+			told = time.Now()
+			js.Global().Call("postMessage", map[string]any{"id": id, "part": part})
+		}
+		return true
+	})
+	js.Global().Call("postMessage", messageOf(id, t))
+}
+
+// readTrack makes a hill of a track file.
+func readTrack(data []byte, progress func(float64) bool) Track {
+	track, err := hill.ReadTrack(bytes.NewReader(data), progress)
+	if err != nil {
+		return Track{Err: err}
+	}
+	p, err := hill.FromTrack(&track, hill.Options{})
+	if err != nil {
+		return Track{Err: err}
+	}
+	return Track{Hill: &p}
+}
+
+// messageOf and trackOf are the two ends of what a worker says of a track: the
+// hill as a file of one thing, notes as numbers, errors by their parts, since
+// only plain values pass between the two programs.
+func messageOf(id int, t Track) map[string]any {
+	if t.Err != nil {
+		out := map[string]any{"id": id, "text": t.Err.Error()}
+		if e, ok := t.Err.(*hill.TrackError); ok {
+			out["kind"], out["looks"], out["line"], out["points"], out["got"] = int(e.Kind), int(e.Looks), e.Line, e.Points, e.Got
+		}
+		return out
+	}
+	var notes []any
+	for _, n := range t.Hill.Notes {
+		notes = append(notes, int(n.Kind), n.Count, n.AtM)
+	}
+	file := keep.Encode(keep.Things{Hills: []keep.Hill{keep.HillOf(t.Hill, "track", t.Hill.Name)}})
+	return map[string]any{"id": id, "hill": string(file), "notes": notes}
+}
+
+func trackOf(message js.Value) Track {
+	if kind := message.Get("kind"); kind.Type() == js.TypeNumber {
+		return Track{Err: &hill.TrackError{
+			Kind: hill.TrackErrorKind(kind.Int()), Looks: hill.FileLook(message.Get("looks").Int()),
+			Line: message.Get("line").Int(), Points: message.Get("points").Int(), Got: message.Get("got").String(),
+		}}
+	}
+	if text := message.Get("text"); text.Type() == js.TypeString {
+		return Track{Err: workerError(text.String())}
+	}
+	things, faults := keep.Decode([]byte(message.Get("hill").String()))
+	if len(things.Hills) == 0 {
+		if len(faults) > 0 {
+			return Track{Err: faults[0]}
+		}
+		return Track{Err: workerError("the worker gave no hill")}
+	}
+	p, err := things.Hills[0].Profile("")
+	if err != nil {
+		return Track{Err: err}
+	}
+	p.Name = things.Hills[0].Names[""] // and not the id in its place: the file's name is better
+	notes := message.Get("notes")
+	for i := 0; i+2 < notes.Length(); i += 3 {
+		p.Notes = append(p.Notes, hill.Note{
+			Kind: hill.NoteKind(notes.Index(i).Int()), Count: notes.Index(i + 1).Int(), AtM: notes.Index(i + 2).Float(),
+		})
+	}
+	return Track{Hill: p}
+}
+
+// workerError is an error that came as text alone.
+type workerError string
+
+func (e workerError) Error() string { return string(e) }

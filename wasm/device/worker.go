@@ -1,0 +1,109 @@
+//go:build js && wasm
+
+package device
+
+import (
+	"syscall/js"
+	"time"
+
+	"hillwright/physics/hill"
+)
+
+// Track is what came of a track file: a hill, or why there is none.
+type Track struct {
+	Hill *hill.Profile
+	Err  error
+}
+
+// worker is the page's helper beside it, and what it is asked.
+type worker struct {
+	js   js.Value
+	last int // the request that is answered; messages of others are of no use
+	part func(float64)
+	done func(Track)
+	data []byte // kept to be read here if the worker fails
+}
+
+// ReadTrack reads a track file beside the page and makes a hill of it. part is
+// told how much is read; done what came of it. Where the browser gives no
+// worker it is read in slices between frames. A reading that is under way is
+// stopped first.
+func (d *Device) ReadTrack(data []byte, part func(float64), done func(Track)) {
+	d.stopped++
+	if d.worker == nil && !d.startWorker() {
+		d.readHere(data, part, done)
+		return
+	}
+	w := d.worker
+	w.last++
+	w.part, w.done, w.data = part, done, data
+	array := arrayOf(data)
+	w.js.Call("postMessage", map[string]any{"id": w.last, "track": array}, []any{array.Get("buffer")})
+}
+
+// StopTrack stops a reading at once.
+func (d *Device) StopTrack() {
+	d.stopped++
+	if d.worker != nil {
+		d.worker.js.Call("terminate")
+		d.worker = nil
+	}
+}
+
+func (d *Device) startWorker() bool {
+	start := window().Get("hillwrightStartWorker")
+	if !given(start) {
+		return false
+	}
+	w := &worker{}
+	if !try(func() { w.js = start.Invoke() }) {
+		return false
+	}
+	d.worker = w
+	w.js.Call("addEventListener", "message", js.FuncOf(func(_ js.Value, args []js.Value) any {
+		w.take(args[0].Get("data"))
+		return nil
+	}))
+	once(w.js, map[string]func(js.Value){"error": func(e js.Value) {
+		e.Call("preventDefault")
+		if d.worker == w {
+			d.StopTrack()
+			d.readHere(w.data, w.part, w.done)
+		}
+	}})
+	return true
+}
+
+func (w *worker) take(message js.Value) {
+	if id := message.Get("id"); id.Type() != js.TypeNumber || id.Int() != w.last {
+		return
+	}
+	if part := message.Get("part"); part.Type() == js.TypeNumber {
+		w.part(part.Float())
+		return
+	}
+	w.data = nil
+	w.done(trackOf(message))
+}
+
+// sliceFor is how long a slice of a reading in the page itself may take.
+const sliceFor = 12 * time.Millisecond
+
+// readHere reads a track in the page itself, giving way to it between slices.
+func (d *Device) readHere(data []byte, part func(float64), done func(Track)) {
+	mine := d.stopped
+	go func() {
+		began := time.Now()
+		t := readTrack(data, func(read float64) bool {
+			if time.Since(began) > sliceFor {
+				part(read)
+				time.Sleep(time.Millisecond)
+				began = time.Now()
+			}
+			return mine == d.stopped
+		})
+		if mine == d.stopped {
+			done(t)
+		}
+	}()
+}

@@ -1,0 +1,211 @@
+//go:build js && wasm
+
+package page
+
+import (
+	"syscall/js"
+	"time"
+
+	"hillwright/wasm/state"
+)
+
+// listen hangs one listener for each kind of event on the document; elements
+// say by data-act and data-arg what they are for.
+func (p *page) listen() {
+	h := &hand{page: p}
+	for _, each := range []struct {
+		event string
+		take  func(e js.Value)
+	}{
+		{"click", h.click},
+		{"input", h.input},
+		{"focusout", h.leave},
+		{"keydown", h.key},
+		{"pointerdown", h.down},
+		{"pointermove", h.move},
+		{"pointerup", h.up},
+		{"pointercancel", h.up},
+		{"dragover", h.dragOver},
+		{"dragleave", h.dragLeave},
+		{"drop", h.drop},
+	} {
+		js.Global().Get("document").Call("addEventListener", each.event, js.FuncOf(func(_ js.Value, args []js.Value) any {
+			each.take(args[0])
+			return nil
+		}))
+	}
+}
+
+// hand is what fingers, keys and the mouse are doing.
+type hand struct {
+	page     *page
+	drag     js.Value // the element that is dragged
+	act      string   // its action, "" when nothing is dragged
+	repeats  int      // numbers the presses of stepper buttons
+	repeated bool     // the press stepped on by itself: the click that ends it counts for nothing
+}
+
+// touched finds the element with an action at or above an event's target.
+func touched(e js.Value) (el js.Value, act, arg string) {
+	target := e.Get("target")
+	if target.IsNull() || target.IsUndefined() || target.Get("closest").IsUndefined() {
+		return js.Null(), "", ""
+	}
+	el = target.Call("closest", "[data-act]")
+	if el.IsNull() {
+		return el, "", ""
+	}
+	return el, el.Call("getAttribute", "data-act").String(), orEmpty(el.Call("getAttribute", "data-arg"))
+}
+
+func orEmpty(v js.Value) string {
+	if v.Type() != js.TypeString {
+		return ""
+	}
+	return v.String()
+}
+
+// isField tells that an action comes from a field and not from a press.
+func isField(act string) bool {
+	return act == state.Type || act == state.TypeName || act == state.TypeSections
+}
+
+// isDrag tells that an action follows the finger.
+func isDrag(act string) bool { return act == state.MoveStaff || act == state.MoveWeight }
+
+func (h *hand) do(a state.Action) {
+	a.Now = h.page.works.Now()
+	h.page.do(a)
+}
+
+func (h *hand) click(e js.Value) {
+	_, act, arg := touched(e)
+	if act == "" || isField(act) || isDrag(act) {
+		return
+	}
+	if h.repeated {
+		h.repeated = false
+		return
+	}
+	h.do(state.Action{Name: act, Arg: arg})
+}
+
+func (h *hand) input(e js.Value) {
+	el, act, arg := touched(e)
+	if isField(act) {
+		h.do(state.Action{Name: act, Arg: arg, Text: el.Get("value").String()})
+	}
+}
+
+func (h *hand) leave(e js.Value) {
+	if _, act, arg := touched(e); act == state.Type {
+		h.do(state.Action{Name: state.Typed, Arg: arg})
+	}
+}
+
+func (h *hand) key(e js.Value) {
+	_, act, arg := touched(e)
+	key := e.Get("key").String()
+	sign := map[string]string{"ArrowLeft": "-", "ArrowDown": "-", "ArrowRight": "+", "ArrowUp": "+"}[key]
+	switch {
+	case key == "Escape" && h.page.state.Place != "":
+		h.do(state.Action{Name: state.Close})
+	case key == "Enter" && act == state.TypeName:
+		h.do(state.Action{Name: state.Keep, Arg: arg})
+	case act == state.Type && (key == "ArrowUp" || key == "ArrowDown"):
+		e.Call("preventDefault")
+		h.do(state.Action{Name: map[string]string{"+": state.StepUp, "-": state.StepDown}[sign], Arg: arg})
+	case act == state.MoveWeight && sign != "":
+		e.Call("preventDefault")
+		h.do(state.Action{Name: state.WeightStep, Arg: sign})
+	}
+}
+
+// Holding a stepper's button steps on by itself.
+const (
+	holdFor   = 450 * time.Millisecond
+	stepEvery = 90 * time.Millisecond
+)
+
+func (h *hand) down(e js.Value) {
+	el, act, arg := touched(e)
+	h.repeated = false
+	switch {
+	case isDrag(act):
+		h.drag, h.act = el, act
+		el.Call("setPointerCapture", e.Get("pointerId"))
+		h.move(e)
+	case act == state.StepUp || act == state.StepDown || act == state.StaffStep:
+		h.repeats++
+		go h.repeat(h.repeats, state.Action{Name: act, Arg: arg})
+	}
+}
+
+func (h *hand) repeat(press int, a state.Action) {
+	time.Sleep(holdFor)
+	for press == h.repeats {
+		h.repeated = true
+		h.do(a)
+		time.Sleep(stepEvery)
+	}
+}
+
+func (h *hand) move(e js.Value) {
+	if h.act == "" {
+		return
+	}
+	picture := h.drag.Get("ownerSVGElement")
+	box := picture.Call("getBoundingClientRect")
+	wide := box.Get("width").Float()
+	if wide == 0 {
+		return
+	}
+	x := (e.Get("clientX").Float() - box.Get("left").Float()) / wide * picture.Get("viewBox").Get("baseVal").Get("width").Float()
+	h.do(state.Action{Name: h.act, X: x})
+}
+
+func (h *hand) up(js.Value) {
+	h.act = ""
+	h.repeats++
+}
+
+func hasFiles(e js.Value) bool {
+	types := e.Get("dataTransfer").Get("types")
+	for i := range types.Length() {
+		if types.Index(i).String() == "Files" {
+			return true
+		}
+	}
+	return false
+}
+
+func (h *hand) dragOver(e js.Value) {
+	if !hasFiles(e) {
+		return
+	}
+	e.Call("preventDefault")
+	if !h.page.state.Device.Dropping {
+		h.do(state.Action{Name: state.Dropping, Arg: "over"})
+	}
+}
+
+func (h *hand) dragLeave(e js.Value) {
+	if e.Get("relatedTarget").IsNull() && h.page.state.Device.Dropping {
+		h.do(state.Action{Name: state.Dropping})
+	}
+}
+
+func (h *hand) drop(e js.Value) {
+	if !hasFiles(e) {
+		return
+	}
+	e.Call("preventDefault")
+	h.do(state.Action{Name: state.Dropping})
+	files := e.Get("dataTransfer").Get("files")
+	if files.Length() == 0 {
+		return
+	}
+	h.page.works.ReadFile(files.Index(0), func(name string, data []byte) {
+		h.do(state.Action{Name: state.TrackFile, Arg: name, Data: data})
+	})
+}
