@@ -30,7 +30,6 @@ func (k Kind) String() string { return kinds[k] }
 // motor. PowerW is the most mechanical power at that output [W]. Levels are
 // the assist factors, motor power per rider power, level 1 first. CadenceHigh
 // is the crank cadence above which a crank motor eases off [turns/min].
-// Efficiency is the share of the pack's energy that leaves the output.
 // DirectDrive tells of a hub motor that it has neither gears nor freewheel.
 type Motor struct {
 	Kind        Kind
@@ -38,7 +37,6 @@ type Motor struct {
 	PowerW      float64
 	Levels      []float64
 	CadenceHigh float64
-	Efficiency  float64
 	DirectDrive bool
 }
 

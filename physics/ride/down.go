@@ -41,7 +41,7 @@ func wayDown(r *rig.Rig, p *hill.Profile, o Options) WayDown {
 	}
 	peak := r.Brakes.Peak(&fall, o.DownMps)
 	d.FrontPeakC, d.RearPeakC = peak.FrontC, peak.RearC
-	d.Warm = !r.Brakes.Cool(peak)
+	d.Warm = r.Brakes.Cautious(peak)
 	d.DecelMps2, d.StopBy = stops(r, steepest, peak.FrontC, peak.RearC)
 	d.StoppingM = road.StoppingM(o.DownMps, d.DecelMps2, o.ReactS)
 	bySight := math.Min(fastestMps, road.SpeedForM(o.SightM, fall.StopMps2, o.ReactS))

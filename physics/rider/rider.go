@@ -13,7 +13,8 @@ import (
 // [kg]; PowerW the power wanted on the climb [W at the cranks]; CadenceLow
 // and CadenceHigh the range in which they like to pedal, CadenceLiked the
 // cadence they choose when the gears let them [crank turns per minute].
-// CrankM is the crank's length [m].
+// CrankM is the crank's length [m], HoldMps the slowest speed at which they
+// still balance [m/s]. CriticalW and ReserveJ are critical power [W] and W′ [J].
 type Rider struct {
 	ID, Name     string
 	MassKg       float64
@@ -23,6 +24,8 @@ type Rider struct {
 	CadenceHigh  float64
 	CrankM       float64
 	HoldMps      float64
+	CriticalW    float64
+	ReserveJ     float64
 }
 
 // fadeOut is how far above the range, as a part of CadenceHigh, pedalling has
@@ -36,11 +39,15 @@ func (r *Rider) TorqueLimit() float64 {
 	return 2 / math.Pi * r.MassKg * unit.Gravity * r.CrankM
 }
 
-// Power is what the rider gives [W at the cranks] at a cadence [turns per
+// Power is what a fresh rider gives [W at the cranks] at a cadence [turns per
 // minute, ≥ 0]: the wanted power, less where the torque limit or the end of
 // the cadence range cuts it.
-func (r *Rider) Power(cadence float64) float64 {
-	p := r.PowerW
+func (r *Rider) Power(cadence float64) float64 { return r.PowerOf(r.PowerW, cadence) }
+
+// PowerOf is Power for a rider who wants, or is still able to give, another
+// power [W].
+func (r *Rider) PowerOf(wantedW, cadence float64) float64 {
+	p := wantedW
 	if byTorque := r.TorqueLimit() * cadence * math.Pi / 30; byTorque < p {
 		p = byTorque
 	}
