@@ -9,7 +9,7 @@ import (
 // floors are the packages of the computation, lowest first: a package may know
 // those of lower floors only.
 var floors = map[string]int{
-	"unit": 0, "air": 1, "gear": 1, "rider": 1, "motor": 1, "pack": 1, "brake": 1,
+	"unit": 0, "assume": 0, "air": 1, "gear": 1, "rider": 1, "motor": 1, "pack": 1, "brake": 1,
 	"road": 2, "rule": 2, "rig": 3, "hill": 3, "ride": 4, "ask": 5,
 }
 
