@@ -13,6 +13,7 @@ const (
 	firstSmoothM    = 12.0 // of the first curve, which shows where the road bends
 	scalesTried     = 8
 	rounds          = 6    // of reweighting
+	leastScale      = 0.7  // pieces: a softer curve would swing between heights that lie off its nodes
 	leastSpreadM    = 0.2  // heights are never thought to be better than this
 	leastPull       = 0.2  // weight of a rounded height within half a metre
 	leastStiff      = 0.02 // what is left of the roughness weight at the sharpest bend
@@ -22,7 +23,7 @@ const (
 func fitHeights(data []datum, nodes int, spacingM float64, kind heightKind, smoothM float64) []float64 {
 	s := newSmoother(nodes, data)
 	stiff := func(scaleM float64) float64 {
-		x := scaleM / spacingM
+		x := max(scaleM/spacingM, leastScale)
 		return x * x * x * x
 	}
 	s.solve(stiff(firstSmoothM))

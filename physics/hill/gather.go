@@ -55,40 +55,43 @@ func (g *gather) add(p Point) *TrackError {
 // one: recorders put the ride first and scraps behind it, but a scrap may come
 // first. Routes count only where there is no track.
 func (g *gather) choose(fileName string) (Track, bool) {
-	longest, best := 0.0, -1
 	hasTrack := false
 	for _, l := range g.lines {
 		hasTrack = hasTrack || !l.route && l.to-l.from >= 2
 	}
-	lengths := make([]float64, len(g.lines))
-	for i, l := range g.lines {
-		if l.to-l.from < 2 || l.route && hasTrack {
-			lengths[i] = -1
-			continue
-		}
-		t := g.track(l)
-		lengths[i] = t.RawLengthM()
-		longest = max(longest, lengths[i])
-	}
-	others := 0
-	for i, length := range lengths {
-		switch {
-		case length < 0:
-		case best < 0 && length >= longest/2:
-			best = i
-		default:
-			others++
+	var fit []line
+	for _, l := range g.lines {
+		if l.to-l.from >= 2 && l.route != hasTrack {
+			fit = append(fit, l)
 		}
 	}
-	if best < 0 {
+	if len(fit) == 0 {
 		return Track{}, false
 	}
-	t := g.track(g.lines[best])
-	t.Others = others
+	t := g.track(fit[longEnough(g, fit)])
+	t.Others = len(fit) - 1
 	if t.Name == "" {
 		t.Name = fileName
 	}
 	return t, true
+}
+
+// longEnough finds the first line that is at least half as long as the longest.
+func longEnough(g *gather, lines []line) int {
+	if len(lines) == 1 {
+		return 0
+	}
+	lengths, longest := make([]float64, len(lines)), 0.0
+	for i, l := range lines {
+		t := g.track(l)
+		lengths[i] = t.RawLengthM()
+		longest = max(longest, lengths[i])
+	}
+	i := 0
+	for lengths[i] < longest/2 {
+		i++
+	}
+	return i
 }
 
 func (g *gather) track(l line) Track {

@@ -97,9 +97,11 @@ func (w *way) dropHeightSpikes() {
 	}
 }
 
-// dropHeightSteps takes out single rises from point to point that are steeper
-// than 1:1 and higher than heightJumpM: the recorder found its height again.
-// The heights behind follow on, as behind a hole.
+// dropHeightSteps takes out rises from point to point that are steeper than
+// 1:1, higher than heightJumpM, and took the recorder longer than driftS: its
+// height drifted, or it found it again, while it hardly moved. The heights
+// behind follow on, as behind a hole. Without times nothing is taken out: then
+// the heights more likely come from a map, and are right further on.
 func (w *way) dropHeightSteps() {
 	last, shift := -1, 0.0
 	for i := range w.points {
@@ -110,7 +112,8 @@ func (w *way) dropHeightSteps() {
 		p.HeightM -= shift
 		if last >= 0 {
 			rise := p.HeightM - w.points[last].HeightM
-			if math.Abs(rise) > max(heightJumpM, w.atM[i]-w.atM[last]) {
+			dt := p.TimeS - w.points[last].TimeS
+			if dt > driftS && math.Abs(rise) > max(heightJumpM, w.atM[i]-w.atM[last]) {
 				w.note(NoteSpike, w.atM[i], 0)
 				shift += rise
 				p.HeightM -= rise

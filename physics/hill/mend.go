@@ -18,6 +18,7 @@ const (
 	gapM        = 100.0 // a hole is longer
 	gapLegs     = 10.0  // and longer than so many usual legs
 	leastWayM   = 10.0  // a way that is worth a profile
+	driftS      = 60.0  // a height step that took longer is drift
 	heightJumpM = 15.0  // a height that is off by more than this, and steeper than 1:1, is a spike
 )
 

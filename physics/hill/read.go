@@ -25,23 +25,27 @@ func ReadTrack(r io.Reader, progress func(done float64) bool) (Track, error) {
 
 func readTrack(r io.Reader, progress func(done float64) bool) (Track, *TrackError) {
 	file := newCounted(r, progress)
-	s := newScanner(file)
-	if !s.refill() {
-		if s.err != nil {
-			return Track{}, s.err
-		}
+	head := make([]byte, 16)
+	n, err := io.ReadFull(file, head)
+	head = head[:n]
+	if err != nil && err != io.EOF && err != io.ErrUnexpectedEOF {
+		return Track{}, err.(*TrackError)
+	}
+	if n == 0 {
 		return Track{}, &TrackError{Kind: TrackEmpty}
 	}
-	head := s.buf[:s.end]
-	if big := bytes.HasPrefix(head, []byte{0xFE, 0xFF}); big || bytes.HasPrefix(head, []byte{0xFF, 0xFE}) {
-		rest := append([]byte(nil), head[2:]...)
-		s = newScanner(&utf16Reader{r: io.MultiReader(bytes.NewReader(rest), file), bigEndian: big})
-	} else if bytes.HasPrefix(head, []byte("\xEF\xBB\xBF")) {
-		s.pos = 3
+	whole := io.MultiReader(bytes.NewReader(head), file)
+	s := newScanner(whole)
+	switch {
+	case bytes.HasPrefix(head, []byte{0xFE, 0xFF}):
+		s = newScanner(&utf16Reader{r: whole, bigEndian: true})
+	case bytes.HasPrefix(head, []byte{0xFF, 0xFE}):
+		s = newScanner(&utf16Reader{r: whole})
 	}
 	if look := binaryLook(head); look != LooksUnknown {
 		return Track{}, &TrackError{Kind: TrackWrongFile, Looks: look}
 	}
+	s.mark()
 	c, ok := s.space()
 	if !ok {
 		if s.err != nil {

@@ -57,6 +57,9 @@ func (e *SectionError) Error() string {
 
 func (e *SectionError) what() string {
 	got := strconv.Quote(e.Got)
+	if e.Got == "" {
+		got = "nothing"
+	}
 	switch e.Kind {
 	case SectionsEmpty:
 		return "nothing is typed"

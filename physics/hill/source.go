@@ -180,6 +180,16 @@ func (s *scanner) space() (c byte, ok bool) {
 	}
 }
 
+// mark skips a byte order mark in UTF-8.
+func (s *scanner) mark() {
+	if c, ok := s.next(); ok && c != 0xEF {
+		s.back()
+	} else if ok {
+		s.next()
+		s.next()
+	}
+}
+
 // broken makes the error for a file that is not well formed here.
 func (s *scanner) broken(what string) *TrackError {
 	return &TrackError{Kind: TrackBroken, Line: s.line(), Got: what}

@@ -33,6 +33,8 @@ var noises = []noise{
 	{"whole metres, dense", 2, 0.3, 0, 1, 1, 0.10, 0.12, 0.2, 3},
 }
 
+func newRand(seed uint64) *rand.Rand { return rand.New(rand.NewPCG(seed, 18)) }
+
 func (n noise) record(r *rand.Rand, lengthM float64, height func(x float64) float64) Track {
 	t := Track{SegmentStart: []int{0}}
 	drift := n.driftM * r.NormFloat64()
@@ -67,7 +69,7 @@ func TestShortRampSurvives(t *testing.T) {
 		t.Run(n.name, func(t *testing.T) {
 			meanRise, meanSteepest, meanFlat, worst := 0.0, 0.0, 0.0, 0.0
 			for seed := range uint64(runs) {
-				r := rand.New(rand.NewPCG(seed, 18))
+				r := newRand(seed)
 				foot, from := 300+r.Float64(), 995+10*r.Float64()
 				tr := n.record(r, 2000, func(x float64) float64 {
 					return foot + rise*math.Max(0, math.Min(1, (x-from)/run))

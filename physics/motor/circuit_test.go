@@ -166,6 +166,9 @@ func TestRecovery(t *testing.T) {
 			return
 		}
 		f := c.Recover(most, m.radPerS, m.celsius)
+		if ohm := c.WindingAt(m.celsius); f.WindingW > ohm*c.MaxPhaseA*c.MaxPhaseA*(1+1e-9)+1e-12 {
+			t.Errorf("brakes with %g A of %g", math.Sqrt(f.WindingW/ohm), c.MaxPhaseA)
+		}
 		room := m.volts * math.Min(m.amps, c.MaxChargeA)
 		if -f.ElectricW > room*(1+1e-9)+1e-9 {
 			t.Errorf("recovers %g W where the pack takes %g W", -f.ElectricW, room)

@@ -102,6 +102,15 @@ func balances(h *Heat, airC, airMps, windingW, caseW, perK, fromC float64) func(
 	}
 }
 
+// The series of short steps joins the closed form.
+func TestShortStepsMeetLongOnes(t *testing.T) {
+	for _, x := range []float64{-1e-6, -1e-3, -0.0099, 0.0099, 1e-4} {
+		if got, want := grown(x/30, 30), math.Expm1(x)/x*30; !(math.Abs(got/want-1) < 4e-16) {
+			t.Errorf("at %g %.17g, want %.17g", x, got, want)
+		}
+	}
+}
+
 func anyHeat(t *rapid.T) *Heat {
 	f := func(low, high float64, name string) float64 { return rapid.Float64Range(low, high).Draw(t, name) }
 	return &Heat{
@@ -172,6 +181,16 @@ func TestSecondsToOfAWindingThatTurns(t *testing.T) {
 	same(t, "rises to 100 °C and falls again", w, 100, 1e-3)
 	if late, _ := lumps.Step(95, 140, 20, 0, 0, 0, 3600); late > 100 {
 		t.Errorf("still %g °C", late)
+	}
+	// A moment's crossing just below the highest point it reaches.
+	peak, at := 0.0, 0.0
+	for i := range 4000 {
+		if w, _ := lumps.Step(95, 140, 20, 0, 0, 0, float64(i)/4); w > peak {
+			peak, at = w, float64(i)/4
+		}
+	}
+	if first := lumps.SecondsTo(peak-1e-4, 95, 140, 20, 0, 0, 0); !(first < at+1) {
+		t.Errorf("%g °C is there after %g s, said %g", peak-1e-4, at, first)
 	}
 	if never := lumps.SecondsTo(130, 95, 130, 20, 0, 0, 0); !math.IsInf(never, 1) {
 		t.Errorf("reaches its case's temperature after %g s", never)

@@ -200,26 +200,6 @@ func easing(r *rig.Rig, at Place, body *rig.Body, downMps float64) float64 {
 	if torque <= 0 {
 		return math.Inf(1)
 	}
-	return secondsToEasing(r, torque, spin, math.Abs(run.SpeedMps+at.HeadMps))
-}
-
-const (
-	easingStepS = 10.0
-	easingEndS  = 3 * 3600.0
-)
-
-// secondsToEasing warms a cold motor at a constant torque, its resistance with
-// it, until it begins to ease off; after three hours it never does.
-func secondsToEasing(r *rig.Rig, torque, spin, airMps float64) float64 {
-	airC := float64(r.Day.TemperatureC)
-	w, c := airC, airC
-	for t := 0.0; t < easingEndS; t += easingStepS {
-		f := r.Circuit.Draw(torque, spin, w)
-		then, caseThen := r.Heat.Step(w, c, airC, airMps, f.WindingW, f.CaseW, easingStepS)
-		if then >= r.Heat.EaseFromC {
-			return t + easingStepS*(r.Heat.EaseFromC-w)/(then-w)
-		}
-		w, c = then, caseThen
-	}
-	return math.Inf(1)
+	c := float64(r.Day.TemperatureC)
+	return r.Circuit.SecondsToEasing(&r.Heat, torque, spin, c, c, c, math.Abs(run.SpeedMps+at.HeadMps))
 }
