@@ -187,9 +187,11 @@ type Answer struct {
 	AscentM       float64
 	DescentM      float64
 	// Stalled tells that the rig stops before the end, at StalledAtM from the
-	// foot of the hill.
-	Stalled    bool
-	StalledAtM float64
+	// foot of the hill, on StalledTrip (from 0), StalledBack on the way back.
+	Stalled     bool
+	StalledAtM  float64
+	StalledTrip int
+	StalledBack bool
 
 	WindingPeakC float64
 	// EasingS is how long the motor holds a steady climb of the hardest stretch

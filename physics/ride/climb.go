@@ -160,6 +160,7 @@ func (t *tour) answer() Answer {
 	last := t.ways[len(t.ways)-1]
 	if s.stalled {
 		a.StalledAtM = t.fromFoot(s.atM, last.back)
+		a.StalledTrip, a.StalledBack = last.trip, last.back
 	}
 	p := t.profileOf(h.way)
 	at := placeOn(t.rig, p, h.piece)
