@@ -34,6 +34,7 @@ type run struct {
 type state struct {
 	atM, timeS, kineticJ float64
 	netN                 float64 // pull less load at the end of the last step
+	bendN                float64 // its change along the last step, per metre
 	body                 rig.Body
 	shift                shifter
 	sums                 Energy
@@ -50,7 +51,7 @@ func newRun(r *rig.Rig, o Options) *run {
 }
 
 // tracePoints is about how many points a trace has: enough for a wide screen.
-const tracePoints = 1200
+const tracePoints = 600
 
 // begin sets out on a way.
 func (s *run) begin(p *hill.Profile, first bool) {
@@ -156,12 +157,20 @@ func (s *run) advance(at *Place, now *rig.Now, end float64, coast bool) {
 	}
 }
 
-// stepM is the length of the next step [m]: half a second of road, less where
-// the kinetic energy changes fast, and no further than a shift lasts.
+// bendMost is the change of the net force along a step [N] beyond which a step
+// is too long to follow it.
+const bendMost = 4
+
+// stepM is the length of the next step [m]: a second of road, less where the
+// kinetic energy or the net force change fast, and no further than a shift
+// lasts.
 func (s *run) stepM(v float64) float64 {
-	h := math.Min(5, v/2)
+	h := math.Min(10, v)
 	if change := math.Abs(s.netN); change*h > 0.2*s.kineticJ {
 		h = 0.2 * s.kineticJ / change
+	}
+	if s.bendN*h > bendMost {
+		h = bendMost / s.bendN
 	}
 	return s.shift.cap(v, s.opt.StepScale*math.Max(0.02, h))
 }

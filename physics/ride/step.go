@@ -60,7 +60,7 @@ func (s *run) step(at *Place, now *rig.Now, h float64, coast bool) {
 		kinetic -= brakesJ
 	}
 	s.kineticJ = kinetic
-	s.netN = k4.net
+	s.netN, s.bendN = k4.net, math.Abs(k4.net-k1.net)/h
 	s.atM += h
 	dt := s.duration(h, v0, middle)
 	s.timeS += dt
