@@ -44,15 +44,15 @@ func wayDown(r *rig.Rig, p *hill.Profile, o Options) WayDown {
 	d.Warm = r.Brakes.Cautious(peak)
 	d.DecelMps2, d.StopBy = stops(r, steepest, peak.FrontC, peak.RearC)
 	d.StoppingM = road.StoppingM(o.DownMps, d.DecelMps2, o.ReactS)
-	bySight := math.Min(fastestMps, road.SpeedForM(o.SightM, fall.StopMps2, o.ReactS))
+	bySight := math.Min(FastestMps, road.SpeedForM(o.SightM, fall.StopMps2, o.ReactS))
 	d.MostMps = r.Brakes.SpeedByHeat(&fall, bySight)
 	d.ByHeat = d.MostMps < bySight-1e-6
 	return d
 }
 
-// fastestMps is the highest speed down that is ever advised [m/s]: 50 km/h.
+// FastestMps is the highest speed down that is ever advised [m/s]: 50 km/h.
 // Common practice, no source.
-const fastestMps = 50 / 3.6
+const FastestMps = 50 / 3.6
 
 // stops is the hardest deceleration [m/s²] on a grade with the brakes at
 // temperatures [°C], and what bounds it.
