@@ -92,7 +92,7 @@ func TestRead(t *testing.T) {
 	if bike.Names[""] != "the long-tail" || bike.Names["de"] != "Langheck" || bike.Values["motor.torque_nm"] != "85" || bike.Values["sprockets"] != "11 13 15" {
 		t.Errorf("bike: got %+v", bike)
 	}
-	if bike.Sources["mass_kg"] != "measured" || bike.Sources["pack_wh"] != "assumed" || bike.Sources["motor.torque_nm"] != "" {
+	if bike.Sources["mass_kg"] != "measured" || bike.Sources["pack.energy_wh"] != "assumed" || bike.Sources["motor.torque_nm"] != "" {
 		t.Errorf("sources: got %v; what a row leaves out must count as assumed", bike.Sources)
 	}
 	h := s.Hills[0]

@@ -45,13 +45,13 @@ func runAsk(args []string, out, errs io.Writer) int {
 	f.StringVar(&o.lang, "lang", "en", "language of the answer, `en or de`")
 	f.StringVar(&o.units, "units", "metric", "units of the answer, `metric or imperial`")
 	f.BoolVar(&o.json, "json", false, "answer as JSON, every value with its unit in the key")
-	f.BoolVar(&o.inputs, "inputs", false, "print every input with its value, unit, band and source")
+	f.BoolVar(&o.inputs, "inputs", false, "print every input with its value, unit, band and source; with -json as JSON")
 	f.Func("set", "override an input by its path, `PATH=VALUE`; may be given again", func(s string) error {
 		o.sets = append(o.sets, s)
 		return nil
 	})
 	f.Usage = func() {
-		fmt.Fprint(errs, "usage: hillwright ask [-bike ID] [-rider ID] [-load ID] [-day ID] [-hill FILE.gpx|ID|SECTIONS | -grade 12%] [-set PATH=VALUE …] [-json | -inputs]\n\n")
+		fmt.Fprint(errs, "usage: hillwright ask [-bike ID] [-rider ID] [-load ID] [-day ID] [-hill FILE.gpx|ID|SECTIONS | -grade 12%] [-set PATH=VALUE …] [-inputs] [-json]\n\n")
 		f.PrintDefaults()
 	}
 	if err := f.Parse(args); err != nil {
@@ -90,7 +90,7 @@ func (o *askOptions) answer(out io.Writer) error {
 	}
 	switch {
 	case o.inputs:
-		return writeInputs(out, &q, voice)
+		return o.listInputs(out, &q, voice)
 	case o.grade != "":
 		return o.steady(out, &q, voice)
 	}
@@ -207,7 +207,7 @@ func (o *askOptions) climb(out io.Writer, q *ask.Question, s *keep.Shop, v words
 		_, err = out.Write(ask.AnswerJSON(r, a, why))
 		return err
 	}
-	return writeAnswer(out, r, p, a, v)
+	return writeAnswer(out, q, r, p, a, v)
 }
 
 func (o *askOptions) steady(out io.Writer, q *ask.Question, v words.Voice) error {
@@ -226,4 +226,17 @@ func (o *askOptions) steady(out io.Writer, q *ask.Question, v words.Voice) error
 		return err
 	}
 	return writeSteady(out, r, g, a, v)
+}
+
+// listInputs prints the catalogue for this question.
+func (o *askOptions) listInputs(out io.Writer, q *ask.Question, v words.Voice) error {
+	r, err := q.Rig(0)
+	if err != nil {
+		return err
+	}
+	if o.json {
+		_, err = out.Write(ask.InputsJSON(q, r))
+		return err
+	}
+	return writeInputs(out, q, r, v)
 }

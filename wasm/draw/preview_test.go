@@ -121,7 +121,8 @@ func TestPreview(t *testing.T) {
 				if i == 0 {
 					put(Balance(&a.Balance, size, h.voice, BalanceOptions{WantedN: a.Balance.Pegs[0].PullN * 1.3}))
 				}
-				st, held := ride.Settle(r, ride.At(a.Hardest.SteepestGrade, 0), down)
+				fresh := r.Fresh(1)
+				st, held := ride.Settle(r, ride.At(a.Hardest.SteepestGrade, 0), &fresh, down)
 				if !held {
 					st = ride.Running{}
 				}

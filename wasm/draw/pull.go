@@ -32,6 +32,7 @@ type sample struct {
 // diagram is the geometry of pull against speed.
 type diagram struct {
 	rig     *rig.Rig
+	now     rig.Now // charged, cool and rested on this grade
 	grade   unit.Grade
 	running ride.Running
 	voice   words.Voice
@@ -44,7 +45,8 @@ type diagram struct {
 }
 
 func newDiagram(r *rig.Rig, g unit.Grade, running ride.Running, size Size, v words.Voice) *diagram {
-	d := &diagram{rig: r, grade: g, running: running, voice: v, size: size}
+	fresh := r.Fresh(1)
+	d := &diagram{rig: r, now: r.At(&fresh, g.Sin(), g.Cos()), grade: g, running: running, voice: v, size: size}
 	d.plot = box{diagramLeft, diagramTop, size.W - diagramRight, size.H - diagramBottom}
 	d.mostMps = math.Max(leastMost, 1.5*running.SpeedMps)
 	mps, newtons := d.units()
@@ -75,7 +77,7 @@ func (d *diagram) sample() {
 	for i := 0; i <= n; i++ {
 		s := sample{mps: d.mostMps * float64(i) / float64(n), pullN: math.Inf(-1)}
 		for gear := range d.rig.Gears {
-			if p := d.rig.PullAt(s.mps, gear); p.Sum() > s.pullN {
+			if p := d.rig.PullAt(s.mps, gear, &d.now); p.Sum() > s.pullN {
 				s.pullN, s.by = p.Sum(), p.By
 			}
 		}
@@ -157,7 +159,7 @@ func (d *diagram) gears() dom.Parts {
 			to = &used
 		}
 		for i, s := range d.best {
-			pull := d.rig.PullAt(s.mps, gear).Sum()
+			pull := d.rig.PullAt(s.mps, gear, &d.now).Sum()
 			if i == 0 {
 				to.move(d.x(s.mps), d.y(pull))
 			} else {

@@ -33,7 +33,8 @@ func TestPullDiagramIsWellDrawn(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		r := drawnRig(t)
 		g := unit.Grade(rapid.Float64Range(-0.1, 0.4).Draw(t, "grade"))
-		run, held := ride.Settle(r, ride.At(g, r.Day.WindMps), 25/3.6)
+		fresh := r.Fresh(1)
+		run, held := ride.Settle(r, ride.At(g, r.Day.WindMps), &fresh, 25/3.6)
 		size := Size{rapid.Float64Range(320, 900).Draw(t, "w"), rapid.Float64Range(220, 420).Draw(t, "h")}
 		v := rapid.SampledFrom(voices).Draw(t, "voice")
 		n := PullDiagram(r, g, run, size, v)
@@ -58,7 +59,8 @@ func TestCrossingLiesOnBothLines(t *testing.T) {
 	r := bench(t)
 	for _, percent := range []float64{2, 6, 12, 18} {
 		g := unit.Percent(percent)
-		run, held := ride.Settle(r, ride.At(g, r.Day.WindMps), 25/3.6)
+		fresh := r.Fresh(1)
+		run, held := ride.Settle(r, ride.At(g, r.Day.WindMps), &fresh, 25/3.6)
 		if !held {
 			t.Fatalf("the common bike does not hold %v %%", percent)
 		}
@@ -67,7 +69,7 @@ func TestCrossingLiesOnBothLines(t *testing.T) {
 		if load := d.y(d.loadAt(run.SpeedMps)); math.Abs(load-y) > 0.5 {
 			t.Errorf("at %v %% the load passes %v px from the crossing", percent, load-y)
 		}
-		if best := d.y(r.PullAt(run.SpeedMps, run.Gear).Sum()); math.Abs(best-y) > 0.5 {
+		if best := d.y(r.PullAt(run.SpeedMps, run.Gear, &d.now).Sum()); math.Abs(best-y) > 0.5 {
 			t.Errorf("at %v %% the gear's pull passes %v px from the crossing", percent, best-y)
 		}
 		if math.IsNaN(x) || x < d.plot.x0 || x > d.plot.x1 {
@@ -90,7 +92,8 @@ func TestLimitsAreNamedWhereTheyDecide(t *testing.T) {
 
 func BenchmarkPullDiagram(b *testing.B) {
 	r := bench(b)
-	run, _ := ride.Settle(r, ride.At(0.1, 0), 7)
+	fresh := r.Fresh(1)
+	run, _ := ride.Settle(r, ride.At(0.1, 0), &fresh, 7)
 	for b.Loop() {
 		PullDiagram(r, 0.1, run, Size{360, 260}, metric)
 	}

@@ -102,8 +102,8 @@ func PullText(r *rig.Rig, g unit.Grade, running ride.Running, v words.Voice) *do
 	var rows [][]string
 	for i := 1; float64(i)*d.stepMps <= d.mostMps*(1+1e-9); i++ {
 		mps := float64(i) * d.stepMps
-		gear := r.BestGear(mps)
-		pull := r.PullAt(mps, gear)
+		gear := r.BestGear(mps, &d.now)
+		pull := r.PullAt(mps, gear, &d.now)
 		rows = append(rows, []string{v.Speed(mps), v.Gear(r, gear), v.Pull(pull.Sum()), v.Limit(pull.By), v.Pull(d.loadAt(mps))})
 	}
 	return table(d.summary(v), heads, rows)

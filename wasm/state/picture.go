@@ -88,9 +88,11 @@ func (s *State) TriedGrade() (g unit.Grade, ok bool) {
 }
 
 // Settled is how the rig would ride on the hardest place's grade if it went on
-// for ever, as the pull diagram shows; zero when that grade is not held.
+// for ever, cool and rested, as the pull diagram shows; zero when that grade is
+// not held.
 func (s *State) Settled() ride.Running {
-	run, ok := ride.Settle(s.Rig, ride.At(s.Answer.Balance.Grade, s.Question.Day.WindMps), s.Question.Ride.DownMps)
+	fresh := s.Rig.Fresh(s.Question.Ride.Charge)
+	run, ok := ride.Settle(s.Rig, ride.At(s.Answer.Balance.Grade, s.Question.Day.WindMps), &fresh, s.Question.Ride.DownMps)
 	if !ok {
 		return ride.Running{}
 	}

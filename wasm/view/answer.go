@@ -77,15 +77,15 @@ func (v *viewer) notes() Parts {
 	}
 	note(words.NoteHolds, v.Grade(a.Balance.SteepestGrade))
 	if a.Stalled {
-		note(words.NoteUntil, v.Length(a.StalledAtM), v.Duration(a.TimeS))
+		note(words.NoteUntil, v.Length(a.StalledAtM), v.Duration(a.ClimbS))
 	} else {
-		note(words.NoteWhole, v.Length(a.LengthM), v.Height(a.AscentM), v.Duration(a.TimeS))
+		note(words.NoteWhole, v.Length(a.LengthM), v.Height(a.AscentM), v.Duration(a.ClimbS))
 	}
 	e := &a.Energy
 	if sum := e.RiderJ + e.MotorJ; sum > 0 {
 		note(words.NoteShares, v.Energy(e.RiderJ), v.Energy(e.MotorJ), v.Percent(e.MotorJ/sum))
 	}
-	if pack := v.Question.Bike.PackWh; pack > 0 && e.FromPackJ > 0 {
+	if pack := v.Question.Bike.Pack.EnergyWh; pack > 0 && e.FromPackJ > 0 {
 		note(words.NotePack, v.Energy(e.FromPackJ), v.Percent(e.FromPackJ/(pack*3600)))
 	}
 	return out
@@ -100,7 +100,12 @@ func (v *viewer) cautions() *Node {
 			list = append(list, El("li", Text(v.Note(n))))
 		}
 	}
-	for _, k := range []words.Key{words.CautionEstimate, words.CautionBrakes, words.CautionDescent, words.CautionGrip, words.CautionLoad, words.CautionPractice, words.CautionLaw} {
+	if v.Answer != nil {
+		for _, text := range v.Cautions(v.Rig, &v.Answer.WayDown, v.Question.Ride.DownMps) {
+			list = append(list, El("li", Text(text)))
+		}
+	}
+	for _, k := range []words.Key{words.CautionEstimate, words.CautionDescent, words.CautionGrip, words.CautionLoad, words.CautionPractice, words.CautionLaw} {
 		list = append(list, El("li", v.say(k)))
 	}
 	return region("section", "cautions", With("aria-labelledby", "cautions-title"),

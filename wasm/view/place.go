@@ -106,7 +106,7 @@ func tick(chosen bool) *Node {
 var short = map[keep.Kind][]string{
 	keep.Rider: {"mass_kg", "power_w"},
 	keep.Load:  {"mass_kg"},
-	keep.Bike:  {"motor.kind", "motor.torque_nm", "mass_kg", "pack_wh"},
+	keep.Bike:  {"motor.kind", "motor.torque_nm", "mass_kg", "pack.energy_wh"},
 	keep.Day:   {"temperature_c", "wind_mps"},
 }
 

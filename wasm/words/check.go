@@ -102,7 +102,7 @@ func checkTables() []string {
 		what string
 		keys []Key
 	}{
-		{"limit", limitNames[:]}, {"limit's meaning", limitMeanings[:]}, {"source", sourceNames},
+		{"limit", limitNames[:]}, {"limit's meaning", limitMeanings[:]}, {"source", sourceNames}, {"what bounds a stop", stopTexts},
 		{"note", noteTexts}, {"problem with sections", sectionTexts},
 		{"problem with tracks", trackTexts}, {"problem with hills", profileTexts}, {"look of a file", lookTexts},
 	} {

@@ -1,7 +1,8 @@
 package words
 
-// english is the catalogue in English: British spelling, short and plain.
-var english = [keys]string{
+// englishPage is the part of key.go in English: British spelling, short and
+// plain.
+var englishPage = [keys]string{
 	VerdictClears:      "clears",
 	VerdictTight:       "tight",
 	VerdictShort:       "short",
@@ -223,8 +224,7 @@ var english = [keys]string{
 	SectionsUse:      "type a hill",
 
 	CautionDescent:  "Try the brakes before the descent; on a long one brake both, in bursts, and stop when they smell.",
-	CautionBrakes:   "The way down is not computed yet: a bike that climbs this hill is not thereby safe on it.",
-	CautionGrip:     "Grip is not weighed here: on wet, loose or icy ground a wheel may spin before any limit shown.",
+	CautionGrip:     "Grip is a usual value of the ground: ice, wet metal, paint and leaves hold far less.",
 	CautionLoad:     "Keep within the bike's permitted total mass; lash loads low and tight.",
 	CautionLaw:      "Check your local rules.",
 	CautionWorkshop: "Work on brakes, motor and pack belongs in a trained mechanic's hands.",
@@ -262,7 +262,6 @@ var english = [keys]string{
 	InMotorPower:      "motor power",
 	InMotorLevels:     "assist factors, level 1 first",
 	InMotorCadence:    "cadence at which the motor eases off",
-	InMotorEfficiency: "motor efficiency",
 	InPack:            "pack's energy",
 	InLoadMass:        "load's mass",
 	InLoadCdA:         "load's drag area",

@@ -1,8 +1,8 @@
 package words
 
-// german is the catalogue in German, in the words of the trade; it avoids
-// addressing the reader where it can.
-var german = [keys]string{
+// germanPage is the part of key.go in German, in the words of the trade; it
+// avoids addressing the reader where it can.
+var germanPage = [keys]string{
 	VerdictClears:      "schafft es",
 	VerdictTight:       "knapp",
 	VerdictShort:       "reicht nicht",
@@ -224,8 +224,7 @@ var german = [keys]string{
 	SectionsUse:      "Berg eintippen",
 
 	CautionDescent:  "Vor der Abfahrt die Bremsen prüfen; auf langen Abfahrten beide im Wechsel benutzen und anhalten, wenn sie riechen.",
-	CautionBrakes:   "Die Abfahrt ist hier nicht gerechnet: Wer hinaufkommt, kommt damit noch nicht sicher herunter.",
-	CautionGrip:     "Die Haftung ist hier nicht gewogen: auf nassem, losem oder eisigem Grund dreht ein Rad womöglich vor jeder gezeigten Grenze durch.",
+	CautionGrip:     "Die Haftung ist ein üblicher Wert des Untergrunds: Eis, nasses Metall, Farbe und Laub halten weit weniger.",
 	CautionLoad:     "Das zulässige Gesamtgewicht einhalten; Lasten tief und fest verzurren.",
 	CautionLaw:      "Die örtlichen Vorschriften prüfen.",
 	CautionWorkshop: "Arbeiten an Bremsen, Motor und Akku gehören in Fachhände.",
@@ -263,7 +262,6 @@ var german = [keys]string{
 	InMotorPower:      "Motorleistung",
 	InMotorLevels:     "Unterstützungsfaktoren, ab Stufe 1",
 	InMotorCadence:    "Trittfrequenz, ab der der Motor nachlässt",
-	InMotorEfficiency: "Wirkungsgrad des Motors",
 	InPack:            "Energie des Akkus",
 	InLoadMass:        "Gewicht der Ladung",
 	InLoadCdA:         "Luftwiderstandsfläche der Ladung",

@@ -39,6 +39,14 @@ var (
 	asHeight    = shown{{times: 1, unit: "m"}, {times: 1 / metresPerFoot, unit: "ft"}}
 	asSpeed     = shown{{times: 3.6, unit: "km/h"}, {times: 3600 / unit.MetresPerMile, unit: "mph"}}
 	asTorque    = shown{{times: 1, unit: "N·m"}, {times: 1 / newtonMetrePerLF, unit: "lbf·ft"}}
+	asVolt      = both(scale{times: 1, unit: "V"})
+	asAmpere    = both(scale{times: 1, unit: "A"})
+	asMilliohm  = both(scale{times: 1000, unit: "mΩ"})
+	asPerAmpere = both(scale{times: 1, unit: "N·m/A"})
+	asCooling   = both(scale{times: 1, unit: "W/K"})
+	asKilojoule = both(scale{times: 1e-3, unit: "kJ"})
+	asMinutes   = both(scale{times: 1. / 60, unit: "min"})
+	asPlace     = shown{{times: 100, unit: "cm"}, {times: 1 / metresPerInch, unit: "in"}}
 	asTemp      = shown{{times: 1, unit: "°C"}, {times: 1.8, plus: 32, unit: "°F"}}
 )
 
@@ -77,8 +85,7 @@ var inputs = []input{
 	{"bike.motor.power_w", InMotorPower, asWatt, [2]float64{25, 25}},
 	{"bike.motor.levels", InMotorLevels, asIs, [2]float64{}},
 	{"bike.motor.cadence_high_rpm", InMotorCadence, asCadence, [2]float64{1, 1}},
-	{"bike.motor.efficiency", InMotorEfficiency, asPercent, [2]float64{1, 1}},
-	{"bike.pack_wh", InPack, asWattHours, [2]float64{25, 25}},
+	{"bike.pack.energy_wh", InPack, asWattHours, [2]float64{25, 25}},
 	{"load.mass_kg", InLoadMass, asMass, [2]float64{1, 2}},
 	{"load.cda_m2", InLoadCdA, asArea, [2]float64{0.01, 0.01}},
 	{"day.temperature_c", InTemperature, asTemp, [2]float64{1, 2}},
@@ -91,6 +98,45 @@ var inputs = []input{
 	{"ride.start_mps", InStart, asSpeed, [2]float64{1, 1}},
 	{"ride.down_mps", InDown, asSpeed, [2]float64{1, 1}},
 	{"ride.law", InLaw, asIs, [2]float64{}},
+	{"rider.critical_w", InCritical, asWatt, [2]float64{5, 5}},
+	{"rider.reserve_j", InReserve, asKilojoule, [2]float64{0.5, 0.5}},
+	{"bike.motor.direct_drive", InDirectDrive, asIs, [2]float64{}},
+	{"bike.motor.voltage_v", InVoltage, asVolt, [2]float64{1, 1}},
+	{"bike.motor.mass_kg", InMotorMass, asMass, [2]float64{0.1, 0.2}},
+	{"bike.motor.torque_nm_per_a", InTorquePerAmp, asPerAmpere, [2]float64{0.005, 0.005}},
+	{"bike.motor.winding_ohm", InWinding, asMilliohm, [2]float64{1, 1}},
+	{"bike.motor.max_pack_a", InMaxPackA, asAmpere, [2]float64{1, 1}},
+	{"bike.motor.ease_from_c", InEaseFrom, asTemp, [2]float64{1, 2}},
+	{"bike.motor.ease_to_c", InEaseTo, asTemp, [2]float64{1, 2}},
+	{"bike.motor.case_w_per_k", InCaseCooling, asCooling, [2]float64{0.05, 0.05}},
+	{"bike.pack.chemistry", InChemistry, asIs, [2]float64{}},
+	{"bike.pack.health", InHealth, asPercent, [2]float64{1, 1}},
+	{"bike.pack.resistance_ohm", InPackOhm, asMilliohm, [2]float64{5, 5}},
+	{"bike.pack.max_a", InPackMaxA, asAmpere, [2]float64{1, 1}},
+	{"bike.wheelbase_m", InWheelbase, asMM, [2]float64{10, 10}},
+	{"bike.mass_ahead_m", InBikeAhead, asPlace, [2]float64{1, 0.5}},
+	{"bike.mass_height_m", InBikeHeight, asPlace, [2]float64{1, 0.5}},
+	{"bike.rider_ahead_m", InRiderAhead, asPlace, [2]float64{1, 0.5}},
+	{"bike.rider_height_m", InRiderHeight, asPlace, [2]float64{1, 0.5}},
+	{"bike.rack_ahead_m", InRackAhead, asPlace, [2]float64{1, 0.5}},
+	{"bike.rack_height_m", InRackHeight, asPlace, [2]float64{1, 0.5}},
+	{"bike.box_ahead_m", InBoxAhead, asPlace, [2]float64{1, 0.5}},
+	{"bike.box_height_m", InBoxHeight, asPlace, [2]float64{1, 0.5}},
+	{"bike.front_brake", InFrontBrake, asIs, [2]float64{}},
+	{"bike.rear_brake", InRearBrake, asIs, [2]float64{}},
+	{"bike.front_brake_share", InFrontShare, asPercent, [2]float64{5, 5}},
+	{"load.place", InLoadPlace, asIs, [2]float64{}},
+	{"day.ground", InGround, asIs, [2]float64{}},
+	{"day.grip", InGrip, asIs, [2]float64{0.05, 0.05}},
+	{"day.pack_c", InPackTemperature, asTemp, [2]float64{1, 2}},
+	{"ride.charge", InCharge, asPercent, [2]float64{5, 5}},
+	{"ride.charge_kept", InChargeKept, asPercent, [2]float64{5, 5}},
+	{"ride.back", InBack, asIs, [2]float64{}},
+	{"ride.trips", InTrips, asIs, [2]float64{1, 1}},
+	{"ride.pause_s", InPause, asMinutes, [2]float64{5, 5}},
+	{"ride.recover", InRecover, asIs, [2]float64{}},
+	{"ride.sight_m", InSight, asHeight, [2]float64{5, 10}},
+	{"ride.reaction_s", InReaction, asSeconds, [2]float64{0.1, 0.1}},
 }
 
 func inputAt(path string) (input, bool) {

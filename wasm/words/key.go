@@ -275,7 +275,6 @@ const (
 
 	// Cautions.
 	CautionDescent
-	CautionBrakes
 	CautionGrip
 	CautionLoad
 	CautionLaw
@@ -317,7 +316,6 @@ const (
 	InMotorPower
 	InMotorLevels
 	InMotorCadence
-	InMotorEfficiency
 	InPack
 	InLoadMass
 	InLoadCdA
@@ -525,5 +523,5 @@ const (
 	SteadySpeed
 	SteadySpeedToo
 
-	keys // how many there are
+	pageKeys // how many there are in this file; key_ride.go goes on
 )

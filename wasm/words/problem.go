@@ -39,6 +39,12 @@ func (v Voice) Problem(err error) string {
 		return v.text(ProblemNoRoad)
 	case errors.Is(err, rig.ErrLevel):
 		return v.text(ProblemLevel)
+	case errors.Is(err, rig.ErrGears):
+		return v.text(ProblemGears)
+	case errors.Is(err, rig.ErrBrakes):
+		return v.text(ProblemBrakes)
+	case errors.Is(err, rig.ErrGround):
+		return v.text(ProblemGround)
 	}
 	return err.Error()
 }

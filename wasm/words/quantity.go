@@ -10,6 +10,7 @@ import (
 // the pound-force from them and standard gravity.
 const (
 	metresPerFoot    = 0.3048
+	metresPerInch    = metresPerFoot / 12
 	kgPerPound       = 0.45359237
 	newtonPerPound   = kgPerPound * unit.Gravity
 	newtonMetrePerLF = newtonPerPound * metresPerFoot

@@ -5,6 +5,7 @@ import (
 	"hillwright/physics/hill"
 	"hillwright/physics/ride"
 	"hillwright/physics/rig"
+	"hillwright/physics/road"
 	"hillwright/physics/rule"
 )
 
@@ -17,6 +18,10 @@ var (
 		rig.Rider:    LimitRider,
 		rig.CutOff:   LimitCutOff,
 		rig.Cadence:  LimitCadence,
+		rig.Heat:     LimitHeat,
+		rig.Cells:    LimitCells,
+		rig.Grip:     LimitGrip,
+		rig.Lift:     LimitLift,
 		rig.Coasting: LimitCoasting,
 	}
 	limitMeanings = [rig.Limits]Key{
@@ -25,11 +30,22 @@ var (
 		rig.Rider:    LimitRiderLong,
 		rig.CutOff:   LimitCutOffLong,
 		rig.Cadence:  LimitCadenceLong,
+		rig.Heat:     LimitHeatLong,
+		rig.Cells:    LimitCellsLong,
+		rig.Grip:     LimitGripLong,
+		rig.Lift:     LimitLiftLong,
 		rig.Coasting: LimitCoastingLong,
 	}
 	verdictNames = []Key{ride.Clears: VerdictClears, ride.Tight: VerdictTight, ride.Short: VerdictShort}
 	sourceNames  = []Key{ask.Assumed: SourceAssumed, ask.Sheet: SourceSheet, ask.Measured: SourceMeasured}
-	noteTexts    = []Key{
+	stopTexts    = []Key{
+		road.BrakesBound: StopBrakes,
+		road.FrontSlides: StopFront,
+		road.RearSlides:  StopRear,
+		road.BothSlide:   StopBoth,
+		road.OverTheBars: StopOver,
+	}
+	noteTexts = []Key{
 		hill.NoteNoHeights:     NoteNoHeights,
 		hill.NoteZeroHeights:   NoteZeroHeights,
 		hill.NoteSpike:         NoteSpike,
@@ -71,6 +87,53 @@ var choices = []choice{
 	{"day.density_kgm3", "computed", BlankComputed},
 	{"day.wind_from_deg", "ahead", BlankAhead},
 	{"ride.level", "highest", BlankHighest},
+	{"bike.motor.direct_drive", "no", ChoiceNo},
+	{"bike.motor.direct_drive", "yes", ChoiceYes},
+	{"ride.back", "no", ChoiceNo},
+	{"ride.back", "yes", ChoiceYes},
+	{"ride.recover", "no", ChoiceNo},
+	{"ride.recover", "yes", ChoiceYes},
+	{"bike.pack.chemistry", "nickel", ChoiceNickel},
+	{"bike.pack.chemistry", "iron-phosphate", ChoiceIron},
+	{"load.place", "rack", ChoiceRack},
+	{"load.place", "box", ChoiceBox},
+	{"load.place", "trailer", ChoiceTrailer},
+	{"bike.front_brake", "hydraulic-160", BrakeHydraulic160},
+	{"bike.front_brake", "hydraulic-180", BrakeHydraulic180},
+	{"bike.front_brake", "hydraulic-203", BrakeHydraulic203},
+	{"bike.front_brake", "cable-disc-160", BrakeCable160},
+	{"bike.front_brake", "rim", BrakeRim},
+	{"bike.front_brake", "drum", BrakeDrum},
+	{"bike.front_brake", "coaster", BrakeCoaster},
+	{"bike.front_brake", "none", BrakeNone},
+	{"bike.rear_brake", "hydraulic-160", BrakeHydraulic160},
+	{"bike.rear_brake", "hydraulic-180", BrakeHydraulic180},
+	{"bike.rear_brake", "hydraulic-203", BrakeHydraulic203},
+	{"bike.rear_brake", "cable-disc-160", BrakeCable160},
+	{"bike.rear_brake", "rim", BrakeRim},
+	{"bike.rear_brake", "drum", BrakeDrum},
+	{"bike.rear_brake", "coaster", BrakeCoaster},
+	{"bike.rear_brake", "none", BrakeNone},
+	{"day.ground", "asphalt-dry", GroundAsphaltDry},
+	{"day.ground", "asphalt-wet", GroundAsphaltWet},
+	{"day.ground", "cobbles-dry", GroundCobblesDry},
+	{"day.ground", "cobbles-wet", GroundCobblesWet},
+	{"day.ground", "gravel-dry", GroundGravelDry},
+	{"day.ground", "gravel-wet", GroundGravelWet},
+	{"day.ground", "leaves-wet", GroundLeavesWet},
+	{"day.ground", "mud", GroundMud},
+	{"day.ground", "snow", GroundSnow},
+	{"bike.motor.mass_kg", "assumed", BlankAssumed},
+	{"bike.motor.torque_nm_per_a", "assumed", BlankAssumed},
+	{"bike.motor.winding_ohm", "assumed", BlankAssumed},
+	{"bike.motor.max_pack_a", "assumed", BlankAssumed},
+	{"bike.motor.ease_from_c", "assumed", BlankAssumed},
+	{"bike.motor.ease_to_c", "assumed", BlankAssumed},
+	{"bike.motor.case_w_per_k", "assumed", BlankAssumed},
+	{"bike.pack.resistance_ohm", "assumed", BlankAssumed},
+	{"bike.pack.max_a", "assumed", BlankAssumed},
+	{"day.grip", "ground", BlankGround},
+	{"day.pack_c", "day", BlankDay},
 }
 
 // Choice gives the person's word for a choice of an input ("crank" of

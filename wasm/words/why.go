@@ -1,9 +1,6 @@
 package words
 
 import (
-	"math"
-
-	"hillwright/physics/motor"
 	"hillwright/physics/ride"
 	"hillwright/physics/rig"
 	"hillwright/physics/unit"
@@ -24,14 +21,15 @@ func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 	case b.Grade < level && a.Hardest.SteepestGrade < level:
 		return v.Say(WhyDown, v.Pull(b.WantedN), slowest)
 	}
-	first := v.weigh(r, b, v.where(a), a.Verdict)
+	in := stateOf(a)
+	first := v.weigh(r, b, in, v.where(a), a.Verdict)
 	switch {
 	case a.Stalled:
 		return first + " " + v.stops(a)
 	case a.Verdict == ride.Short:
 		return first + " " + v.Say(WhyGivesUp)
 	}
-	return first + " " + v.speed(r, b, &a.Hardest.Running)
+	return first + " " + v.speed(r, b, in, &a.Hardest.Running)
 }
 
 // atFoot is how far from the foot a rig that stops has not got away [m].
@@ -39,11 +37,15 @@ const atFoot = 1.0
 
 // stops tells where it stops, seen from the hardest stretch.
 func (v Voice) stops(a *ride.Answer) string {
-	at := v.Length(a.StalledAtM)
+	at, h := v.Length(a.StalledAtM), &a.Hardest
 	switch {
-	case a.StalledAtM < atFoot:
+	case a.StalledTrip != h.Trip || a.StalledBack != h.Back:
+		return v.Say(WhyStops, v.onWay(at, a.StalledTrip, a.StalledBack, WhyAtBack, WhyAtTrip, WhyAtTripBack))
+	case !h.Back && a.StalledAtM < atFoot:
 		return v.text(WhyStopsAtFoot)
-	case a.StalledAtM < a.Hardest.FromM:
+	case h.Back && a.StalledAtM > a.LengthM-atFoot:
+		return v.text(WhyStopsAtTurn)
+	case !h.Back && a.StalledAtM < h.FromM || h.Back && a.StalledAtM > h.ToM:
 		return v.Say(WhyStopsBefore, at)
 	case a.Balance.Headroom() > 0:
 		return v.Say(WhyStopsThough, at)
@@ -51,9 +53,29 @@ func (v Voice) stops(a *ride.Answer) string {
 	return v.Say(WhyStops, at)
 }
 
-// where names the hardest stretch: its length, its grade, its steepest piece
-// where that reads differently, and where it begins.
+// onWay adds to a text on which way of a round trip it is: nothing on the first
+// way, else by the keys for the way back, a later trip, the way back of one.
+func (v Voice) onWay(text string, trip int, back bool, onBack, onTrip, onTripBack Key) string {
+	number := v.Number(float64(trip+1), 0)
+	switch {
+	case trip > 0 && back:
+		return v.Say(onTripBack, text, number)
+	case trip > 0:
+		return v.Say(onTrip, text, number)
+	case back:
+		return v.Say(onBack, text)
+	}
+	return text
+}
+
+// where names the hardest stretch and on which way it is hardest.
 func (v Voice) where(a *ride.Answer) string {
+	return v.onWay(v.stretch(a), a.Hardest.Trip, a.Hardest.Back, WhyOnBack, WhyOnTrip, WhyOnTripBack)
+}
+
+// stretch names the hardest stretch: its length, its grade, its steepest piece
+// where that reads differently, and where it begins.
+func (v Voice) stretch(a *ride.Answer) string {
 	h := &a.Hardest
 	length, mean, steepest := v.Length(h.ToM-h.FromM), v.Grade(h.Grade), v.Grade(h.SteepestGrade)
 	from := v.text(WhyFoot)
@@ -73,13 +95,13 @@ func (v Voice) where(a *ride.Answer) string {
 }
 
 // weigh is the sentence of the balance at a place.
-func (v Voice) weigh(r *rig.Rig, b *ride.Balance, place string, verdict ride.Verdict) string {
+func (v Voice) weigh(r *rig.Rig, b *ride.Balance, in state, place string, verdict ride.Verdict) string {
 	wanted := v.Pull(b.WantedN)
 	if len(b.Pegs) == 0 {
 		return capital(v.Say(WhyUnheld, place, wanted))
 	}
 	peg := b.Pegs[0]
-	what := v.what(r, peg.Limit, b.Gear, b.SpeedMps)
+	what := v.what(r, b, in, peg.Limit, b.Gear, b.SpeedMps)
 	if peg.Headroom < 0 {
 		k := WhyShort
 		if verdict != ride.Short {
@@ -101,15 +123,15 @@ func (v Voice) spare(part float64) string {
 }
 
 // speed is the sentence of how fast it passes and what decides that.
-func (v Voice) speed(r *rig.Rig, b *ride.Balance, run *ride.Running) string {
+func (v Voice) speed(r *rig.Rig, b *ride.Balance, in state, run *ride.Running) string {
 	speed := v.Speed(run.SpeedMps)
 	switch {
 	case len(b.Pegs) > 0 && b.Pegs[0].Headroom < 0:
-		return capital(v.Say(WhySlowest, speed, v.what(r, run.SetBy, run.Gear, run.SpeedMps)))
+		return capital(v.Say(WhySlowest, speed, v.what(r, b, in, run.SetBy, run.Gear, run.SpeedMps)))
 	case len(b.Pegs) > 0 && b.Pegs[0].Limit == run.SetBy:
 		return capital(v.Say(WhySpeedToo, speed))
 	}
-	return capital(v.Say(WhySpeed, speed, v.what(r, run.SetBy, run.Gear, run.SpeedMps)))
+	return capital(v.Say(WhySpeed, speed, v.what(r, b, in, run.SetBy, run.Gear, run.SpeedMps)))
 }
 
 // WhySteady says the same of one grade that goes on for ever.
@@ -122,7 +144,8 @@ func (v Voice) WhySteady(r *rig.Rig, g unit.Grade, a *ride.SteadyAnswer) string 
 	if !a.Held {
 		verdict = ride.Short
 	}
-	first := v.weigh(r, b, v.Say(SteadyAt, v.Grade(g)), verdict)
+	in := fresh(r)
+	first := v.weigh(r, b, in, v.Say(SteadyAt, v.Grade(g)), verdict)
 	steepest := v.Grade(b.SteepestGrade)
 	switch {
 	case !a.Held:
@@ -130,38 +153,8 @@ func (v Voice) WhySteady(r *rig.Rig, g unit.Grade, a *ride.SteadyAnswer) string 
 	case len(b.Pegs) > 0 && b.Pegs[0].Limit == a.Running.SetBy:
 		return first + " " + v.Say(SteadySpeedToo, v.Speed(a.Running.SpeedMps), steepest)
 	}
-	what := v.what(r, a.Running.SetBy, a.Running.Gear, a.Running.SpeedMps)
+	what := v.what(r, b, in, a.Running.SetBy, a.Running.Gear, a.Running.SpeedMps)
 	return first + " " + v.Say(SteadySpeed, v.Speed(a.Running.SpeedMps), what, steepest)
-}
-
-// what names a limit as the subject of a sentence, for this rig in this gear.
-func (v Voice) what(r *rig.Rig, l rig.Limit, gear int, speedMps float64) string {
-	m := &r.Bike.Motor
-	switch l {
-	case rig.Torque:
-		if m.Kind != motor.Crank {
-			return v.text(WhatTorqueHub)
-		}
-		return v.Say(WhatTorque, v.Gear(r, gear))
-	case rig.Power:
-		return v.text(WhatPower)
-	case rig.CutOff:
-		// A law that sets a ratio limits far below its cut-off.
-		if r.Law.MaxRatio > 0 && speedMps < r.Law.SpeedMps-math.Max(r.Law.TaperMps, 0.5) {
-			return v.text(WhatRatio)
-		}
-		return v.Say(WhatCutOff, v.cutOff(&r.Law))
-	case rig.Cadence:
-		return v.text(WhatCadence)
-	case rig.Coasting:
-		return v.text(WhatCoasting)
-	case rig.Rider:
-		if m.Kind == motor.None || r.Level == 0 {
-			return v.text(WhatRiderAlone)
-		}
-		return v.Say(WhatRider, v.Number(float64(r.Level), 0))
-	}
-	return v.Limit(l)
 }
 
 // Gear names a gear by its teeth: "38/46", with a hub gear "38/18 · 3".

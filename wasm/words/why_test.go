@@ -36,10 +36,28 @@ func rigOf(t *testing.T, kind motor.Kind, law string, level int) *rig.Rig {
 	return r
 }
 
+// rigWith is the default rig with inputs set.
+func rigWith(t *testing.T, set ...string) *rig.Rig {
+	t.Helper()
+	q := ask.Default()
+	for _, s := range set {
+		path, value, _ := strings.Cut(s, "=")
+		if err := q.Set(path, value); err != nil {
+			t.Fatal(err)
+		}
+	}
+	r, err := q.Rig(0)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return r
+}
+
 // answerOf is an answer by hand: the words are tested here, not the numbers.
 func answerOf(verdict ride.Verdict, binds, sets rig.Limit, headroom float64) *ride.Answer {
 	return &ride.Answer{
 		Verdict: verdict, LengthM: 460, Stalled: verdict == ride.Short, StalledAtM: 431,
+		WindingPeakC: 118, ReserveLeftJ: 12000,
 		Balance: ride.Balance{
 			Grade: 0.18, SpeedMps: 1.4, Gear: 0, WantedN: 212, SteepestGrade: 0.21,
 			Pegs: []ride.Peg{{Limit: binds, PullN: 212 / (1 - headroom), Headroom: headroom}, {Limit: rig.Power, PullN: 600, Headroom: 0.65}},
@@ -86,6 +104,33 @@ func whyCases(t *testing.T) []say {
 	add("hub motor, short", hub, answerOf(ride.Short, rig.Torque, rig.Torque, -0.36))
 	add("no motor", none, answerOf(ride.Tight, rig.Rider, rig.Rider, 0.07))
 	add("motor off", off, answerOf(ride.Short, rig.Rider, rig.Rider, -0.07))
+	front := rigOf(t, motor.FrontHub, "eu-25", 3)
+	add("grip, front hub", front, answerOf(ride.Short, rig.Grip, rig.Grip, -0.2))
+	wet := rigWith(t, "day.ground=gravel-wet")
+	add("grip, wet gravel", wet, answerOf(ride.Tight, rig.Grip, rig.Rider, 0.05))
+	known := rigWith(t, "day.grip=0.3")
+	add("grip, measured", known, answerOf(ride.Tight, rig.Grip, rig.Rider, 0.05))
+	add("grip, measured, front hub", rigWith(t, "day.grip=0.3", "bike.motor.kind=front-hub"), answerOf(ride.Tight, rig.Grip, rig.Rider, 0.05))
+	cells := func(name string, part float64, set ...string) {
+		r := rigWith(t, set...)
+		a := answerOf(ride.Tight, rig.Cells, rig.Cells, 0.05)
+		b := &a.Balance
+		body := r.Fresh(1)
+		now := r.At(&body, b.Grade.Sin(), b.Grade.Cos())
+		pegs, riderN := r.Pegs(b.SpeedMps, b.Gear, &now)
+		b.Pegs[0].PullN = riderN + part*(pegs[rig.Cells]-riderN)
+		b.WantedN = 0.95 * b.Pegs[0].PullN
+		add("pack: "+name, r, a)
+	}
+	cells("as it is", 1)
+	cells("cold", 1, "day.pack_c=-12")
+	cells("low", 0.6)
+	cells("cold and low", 0.6, "day.pack_c=-12")
+	cells("worn", 1, "bike.pack.health=0.5", "bike.pack.energy_wh=250")
+	tired := answerOf(ride.Tight, rig.Rider, rig.Rider, 0.05)
+	tired.ReserveLeftJ = 0
+	add("rider run empty", rigWith(t, "rider.power_w=300"), tired)
+	add("rider run empty, motor off", rigWith(t, "rider.power_w=300", "ride.level=0"), tired)
 	add("assist ratio", ratio, answerOf(ride.Clears, rig.CutOff, rig.CutOff, 0.2))
 
 	a := answerOf(ride.Clears, rig.Torque, rig.Power, 0.36)
@@ -108,6 +153,22 @@ func whyCases(t *testing.T) []say {
 	a = answerOf(ride.Short, rig.Torque, rig.Power, -0.1)
 	a.StalledAtM = 0.3
 	add("stalled at the foot", crank, a)
+	for _, way := range []struct {
+		name string
+		trip int
+		back bool
+	}{{"the way back", 0, true}, {"trip 3", 2, false}, {"the way back of trip 3", 2, true}} {
+		a = answerOf(ride.Short, rig.Cells, rig.Power, -0.1)
+		a.Hardest.Trip, a.Hardest.Back = way.trip, way.back
+		a.StalledTrip, a.StalledBack = way.trip, way.back
+		add("stalled on "+way.name, crank, a)
+		a = answerOf(ride.Short, rig.Cells, rig.Power, -0.1)
+		a.StalledTrip, a.StalledBack = way.trip, way.back
+		add("stalled on "+way.name+", hardest on the first", crank, a)
+	}
+	a = answerOf(ride.Short, rig.Torque, rig.Power, -0.1)
+	a.Hardest.Back, a.StalledBack, a.StalledAtM = true, true, 459.5
+	add("stalled at the turn", crank, a)
 	a = answerOf(ride.Short, rig.Torque, rig.Power, -0.1)
 	a.Stalled = false
 	add("short, not stalled", crank, a)
@@ -191,9 +252,12 @@ func TestWhySpeaksOfRealAnswers(t *testing.T) {
 				t.Fatal(err)
 			}
 			g := unit.Percent(float64(percent))
-			steady := ride.Steady(r, g, q.Ride.DownMps)
+			_, steady, err := q.Steady(g)
+			if err != nil {
+				t.Fatal(err)
+			}
 			for _, v := range []Voice{inEnglish, inGerman, inFeet} {
-				for _, text := range []string{v.Why(r, a), v.WhySteady(r, g, &steady)} {
+				for _, text := range []string{v.Why(r, a), v.WhySteady(r, g, steady)} {
 					if strings.Contains(text, dash) || strings.ContainsAny(text, "{}") || strings.Count(text, ". ") > 1 {
 						t.Errorf("%s, %d %%: %s", kind, percent, text)
 					}

@@ -3,9 +3,9 @@
 // and sentences made from the computation. Start with Voice and Voice.Say;
 // Voice.Why makes the sentence below the answer.
 //
-// To add a word: add its constant to Key in key.go (where it belongs, with a
-// comment when the blanks are not plain), and its text to english.go and
-// german.go. Blanks are written {0}, {1}; every language must have the same
+// To add a word: add its constant to Key in key.go, or key_ride.go (where it
+// belongs, with a comment when the blanks are not plain), and its text to
+// english.go and german.go, or english_ride.go and german_ride.go. Blanks are written {0}, {1}; every language must have the same
 // ones, in any order. Check tells what is missing.
 package words
 
@@ -58,7 +58,21 @@ type Voice struct {
 	Comma bool
 }
 
-var catalogue = [langs]*[keys]string{&english, &german}
+var (
+	english   = whole(englishPage, englishRide)
+	german    = whole(germanPage, germanRide)
+	catalogue = [langs]*[keys]string{&english, &german}
+)
+
+// whole lays the two parts of a language's catalogue over each other.
+func whole(page, ride [keys]string) [keys]string {
+	for k, text := range ride {
+		if text != "" {
+			page[k] = text
+		}
+	}
+	return page
+}
 
 func (v Voice) text(k Key) string {
 	l := v.Lang
