@@ -167,7 +167,8 @@ func (t *tour) answer() Answer {
 	a.Balance = Weigh(t.rig, at, &h.body)
 	a.Hardest = t.stretch()
 	a.Start = startAt(t.rig, at, &h.body, a.Hardest.Running.Gear)
-	a.EasingS = easing(t.rig, at, &h.body, t.opt.DownMps)
+	cold := t.rig.Fresh(t.opt.Charge) // a motor that is hot already asks less of itself
+	a.EasingS = easing(t.rig, at, &cold, t.opt.DownMps)
 	a.Verdict = verdict(s.stalled, a.Balance.Headroom())
 	a.TripsPerCharge = math.Inf(1)
 	if used := t.used; used > 1e-9 {

@@ -33,6 +33,7 @@ var englishRide = [keys]string{
 	WhyAtTrip:      "{0} on trip {1}",
 	WhyAtTripBack:  "{0} on the way back of trip {1}",
 	WhyStopsAtTurn: "It does not get away at the turn for the way back.",
+	WhyStopsShift:  "It stops at {0} all the same: changing down from gear {1} cost it too much speed.",
 
 	StartOK:      "From rest there it starts in gear {0}, and in the gear it was riding too.",
 	StartOther:   "From rest there it starts in gear {0}, but not in the gear it was riding: change down before stopping.",

@@ -33,6 +33,7 @@ var germanRide = [keys]string{
 	WhyAtTrip:      "{0} bei Fahrt {1}",
 	WhyAtTripBack:  "{0} auf dem Rückweg von Fahrt {1}",
 	WhyStopsAtTurn: "Es kommt am Wendepunkt nicht vom Fleck.",
+	WhyStopsShift:  "Bei {0} bleibt es trotzdem stehen: das Herunterschalten aus Gang {1} hat zu viel Tempo gekostet.",
 
 	StartOK:      "Aus dem Stand fährt es dort im Gang {0} an, und auch im gefahrenen Gang.",
 	StartOther:   "Aus dem Stand fährt es dort im Gang {0} an, nicht aber im gefahrenen Gang: vor dem Anhalten herunterschalten.",

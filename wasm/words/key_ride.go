@@ -41,6 +41,9 @@ const (
 	WhyAtTripBack
 	WhyStopsAtTurn
 
+	// WhyStopsShift: where, gear from which it changed.
+	WhyStopsShift
+
 	// Starting from rest on the hardest stretch. StartOK, StartOther: gear.
 	// StartNot: wanted pull, what stops it, pull it allows.
 	StartOK

@@ -25,7 +25,7 @@ func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 	first := v.weigh(r, b, in, v.where(a), a.Verdict)
 	switch {
 	case a.Stalled:
-		return first + " " + v.stops(a)
+		return first + " " + v.stops(r, a)
 	case a.Verdict == ride.Short:
 		return first + " " + v.Say(WhyGivesUp)
 	}
@@ -36,7 +36,7 @@ func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 const atFoot = 1.0
 
 // stops tells where it stops, seen from the hardest stretch.
-func (v Voice) stops(a *ride.Answer) string {
+func (v Voice) stops(r *rig.Rig, a *ride.Answer) string {
 	at, h := v.Length(a.StalledAtM), &a.Hardest
 	switch {
 	case a.StalledTrip != h.Trip || a.StalledBack != h.Back:
@@ -47,10 +47,19 @@ func (v Voice) stops(a *ride.Answer) string {
 		return v.text(WhyStopsAtTurn)
 	case !h.Back && a.StalledAtM < h.FromM || h.Back && a.StalledAtM > h.ToM:
 		return v.Say(WhyStopsBefore, at)
+	case a.Balance.Headroom() > 0 && lostInShift(r, a):
+		return v.Say(WhyStopsShift, at, v.Gear(r, h.Running.Gear))
 	case a.Balance.Headroom() > 0:
 		return v.Say(WhyStopsThough, at)
 	}
 	return v.Say(WhyStops, at)
+}
+
+// lostInShift tells that a rig which stalled on its hardest stretch, though it
+// has the pull, was still in a higher gear than the one that has it: the change
+// down, during which the chain carries little, took its speed.
+func lostInShift(r *rig.Rig, a *ride.Answer) bool {
+	return r.Bike.ShiftS > 0 && a.Hardest.Running.Gear > a.Balance.Gear
 }
 
 // onWay adds to a text on which way of a round trip it is: nothing on the first

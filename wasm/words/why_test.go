@@ -146,6 +146,9 @@ func whyCases(t *testing.T) []say {
 	a.Hardest.FromM, a.Hardest.SteepestGrade = 0, 0.24
 	add("whole way, steepest piece differs", crank, a)
 	a = answerOf(ride.Short, rig.Torque, rig.Power, 0.36)
+	add("stalled in a shift, though the pull is there", crank, a)
+	a = answerOf(ride.Short, rig.Torque, rig.Power, 0.1)
+	a.Hardest.Running.Gear = 0
 	add("stalled though the pull is there", crank, a)
 	a = answerOf(ride.Short, rig.Torque, rig.Power, -0.1)
 	a.StalledAtM = 73
