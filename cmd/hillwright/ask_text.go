@@ -61,7 +61,7 @@ func writeStates(s sheet, r *rig.Rig, a *ride.Answer, v words.Voice) {
 		s.row(v.Say(words.LabelWindingPeak), v.Temperature(unit.Celsius(a.WindingPeakC)))
 		s.row(v.Say(words.LabelChargeLeft), v.Percent(a.ChargeLeft))
 		if a.CutOut {
-			s.row(v.Say(words.LabelGaveOut), v.Length(a.CutOutAtM))
+			s.row(v.Say(words.LabelGaveOut), v.CutOutAt(a))
 		}
 		if !a.Stalled || a.StalledTrip > 0 {
 			s.row(v.Say(words.LabelTrips), v.Number(a.TripsPerCharge, 1))
@@ -180,6 +180,9 @@ func writeInputs(out io.Writer, q *ask.Question, r *rig.Rig, v words.Voice) erro
 		}
 		if !math.IsNaN(s.Low) {
 			band = fmt.Sprintf("%.6g to %.6g", s.Low, s.High)
+		}
+		if value == "" {
+			value = "-"
 		}
 		if unitName == "" {
 			unitName = "-"

@@ -283,10 +283,13 @@ func law() Input {
 	return word("ride.law", ids, Assumed, func(q *Question) *string { return &q.Ride.LawID })
 }
 
+// classDefault is the word that leaves a number to the class default.
+const classDefault = "assumed"
+
 // completed is a number that a maker's sheet seldom gives; "assumed" leaves it
 // to the class default, with the default's own band.
 func completed(path, unitName string, low, high float64, at func(*Question) *float64) Input {
-	return blank(number(path, unitName, low, high, 0.05, false, Sheet, at), "assumed")
+	return blank(number(path, unitName, low, high, 0.05, false, Sheet, at), classDefault)
 }
 
 func whole(path string, low, high int, at func(*Question) *int) Input {

@@ -11,9 +11,10 @@ import (
 
 // Shown is what stands behind an input in an answer. Text is its value as
 // Question.Get writes it, or, where the question leaves it open, what the rig
-// takes instead; Value is the same as a number, NaN for words and lists. Low
-// and High bound it, NaN where no band is known. Reason is the stable key of
-// the class default that stands in for it (assume.Value.Reason), Text in
+// takes instead (empty when there is nothing, such as a motor's mass without a
+// motor). Value is the same as a number, NaN for words and lists. Low and High
+// bound it, NaN where no band is known. Reason is the stable key of the class
+// default that stands in for it (assume.Value.Reason), Because the same in
 // English; both empty when none does. Open tells that the question leaves it
 // open.
 type Shown struct {
@@ -49,6 +50,10 @@ func (q *Question) Shown(path string, r *rig.Rig) (s Shown, ok bool) {
 	if a, found := assumedAt(r.Assumed, path); found {
 		s.take(a.Value, a.Low, a.High)
 		s.Reason, s.Because = a.Reason, a.Text
+		return s, true
+	}
+	if in.Blank == classDefault {
+		s.Text = "" // the bike has no motor: there is nothing to assume
 		return s, true
 	}
 	switch path {
@@ -94,10 +99,13 @@ func InputsJSON(q *Question, r *rig.Rig) []byte {
 		s, _ := q.Shown(in.Path, r)
 		w.open("", '{')
 		w.text("path", in.Path)
-		if math.IsNaN(s.Value) {
-			w.text("value", s.Text)
-		} else {
+		switch {
+		case !math.IsNaN(s.Value):
 			w.number("value", s.Value)
+		case s.Text == "":
+			w.null("value")
+		default:
+			w.text("value", s.Text)
 		}
 		w.text("unit", in.Unit)
 		w.number("low", s.Low)

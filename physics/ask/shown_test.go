@@ -48,6 +48,19 @@ func TestShownFillsWhatIsLeftOpen(t *testing.T) {
 	}
 }
 
+// Without a motor there is nothing to assume of one.
+func TestShownOfNoMotor(t *testing.T) {
+	q := Default()
+	q.Bike.Motor.Kind = motor.None
+	r, err := q.Rig(0)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if s, ok := q.Shown("bike.motor.mass_kg", r); !ok || s.Text != "" || !math.IsNaN(s.Value) || s.Reason != "" {
+		t.Errorf("without a motor its mass shows %+v", s)
+	}
+}
+
 func TestShownFollowsOtherInputs(t *testing.T) {
 	q := Default()
 	q.Day.TemperatureC = -3

@@ -198,8 +198,13 @@ type Answer struct {
 	// from cold before it eases off [s], +Inf when it never does.
 	EasingS    float64
 	ChargeLeft float64
-	CutOut     bool // the pack gave out under load
+	// CutOut tells that the pack gave less than the motor asked, first at
+	// CutOutAtM from the foot of the hill, on CutOutTrip (from 0), CutOutBack on
+	// the way back.
+	CutOut     bool
 	CutOutAtM  float64
+	CutOutTrip int
+	CutOutBack bool
 	// TripsPerCharge is how often a full charge, less the reserve, serves for
 	// what the first trip took; +Inf when it took nothing.
 	TripsPerCharge float64

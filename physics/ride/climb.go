@@ -54,6 +54,7 @@ type tour struct {
 	least   []float64 // least headroom of each piece of the hill, all passes
 	hardest passing
 	used    float64 // charge used on the first trip
+	cut     int     // the way on which the pack first gave too little, while run.cutOut
 }
 
 // way is one way of the tour that has been ridden.
@@ -110,6 +111,7 @@ func (t *tour) way(p *hill.Profile, trip int, back bool) bool {
 		s.pause(t.opt.PauseS)
 	}
 	s.begin(p, len(t.ways) == 0)
+	hadCut := s.cutOut
 	done := true
 	for i := range p.Grade {
 		if done = s.piece(i); !done {
@@ -119,6 +121,9 @@ func (t *tour) way(p *hill.Profile, trip int, back bool) bool {
 	}
 	s.finish()
 	t.ways = append(t.ways, way{trip: trip, back: back, timeS: s.timeS - s.beganS, trace: s.trace})
+	if s.cutOut && !hadCut {
+		t.cut = len(t.ways) - 1
+	}
 	t.gather(back)
 	return done
 }
@@ -154,13 +159,17 @@ func (t *tour) answer() Answer {
 		TourS: s.timeS, Energy: s.sums,
 		LengthM: t.hill.LengthM(), AscentM: t.hill.AscentM(), DescentM: t.hill.DescentM(),
 		Stalled: s.stalled, WindingPeakC: s.windingPeakC,
-		ChargeLeft: s.body.Charge, CutOut: s.cutOut, CutOutAtM: s.cutOutAtM,
+		ChargeLeft: s.body.Charge, CutOut: s.cutOut,
 		ReserveLeftJ: s.reserveLeastJ,
 	}
 	last := t.ways[len(t.ways)-1]
 	if s.stalled {
 		a.StalledAtM = t.fromFoot(s.atM, last.back)
 		a.StalledTrip, a.StalledBack = last.trip, last.back
+	}
+	if s.cutOut {
+		on := t.ways[t.cut]
+		a.CutOutAtM, a.CutOutTrip, a.CutOutBack = t.fromFoot(s.cutOutAtM, on.back), on.trip, on.back
 	}
 	p := t.profileOf(h.way)
 	at := placeOn(t.rig, p, h.piece)

@@ -47,7 +47,7 @@ var englishRide = [keys]string{
 	MotorTurnsInto: "There the motor turns {0} of the pack's power into pull and {1} into heat.",
 
 	ChargeIsLeft:    "{0} of the charge is left.",
-	ChargeGaveOut:   "The pack gives out under load at {0}, with {1} of its charge left in the end.",
+	ChargeGaveOut:   "At {0} the pack begins to give less than the motor asks; in the end {1} of its charge is left.",
 	ChargeTrips:     "A full charge serves {0} such trips, less what is kept back.",
 	ChargeOneTrip:   "A full charge serves one such trip, less what is kept back.",
 	ChargeNoTrip:    "A full charge, less what is kept back, does not serve one such trip.",
@@ -82,7 +82,7 @@ var englishRide = [keys]string{
 	CautionFading:   "A brake gets {0} warm on the way down and may fade: brake in bursts, and rest before it smells.",
 	CautionWet:      "Wet: brakes bite late and tyres slide early; brake once before it gets steep.",
 	CautionOverBars: "A hard stop lifts the rear wheel before the tyres slide: weight back and low, both brakes.",
-	CautionSlides:   "The front tyre slides first in a hard stop on this ground: brake gently, both brakes, upright.",
+	CautionSlides:   "In a hard stop on this ground the front tyre slides: brake gently, with both brakes, upright.",
 	CautionCarries:  "With {0} on it the bike stops later and lifts or slides earlier than empty.",
 	CautionTrailer:  "A trailer pushes on the way down: brake before the bend, in a straight line.",
 
@@ -99,7 +99,7 @@ var englishRide = [keys]string{
 	LabelEfficiency:  "motor's efficiency there",
 	LabelHeatShare:   "of it lost as heat",
 	LabelChargeLeft:  "charge left",
-	LabelGaveOut:     "pack gives out at",
+	LabelGaveOut:     "pack first gives too little at",
 	LabelTrips:       "trips on a full charge",
 	LabelReserveLeft: "rider's reserve at the least",
 	LabelDown:        "way down",

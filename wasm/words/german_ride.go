@@ -47,7 +47,7 @@ var germanRide = [keys]string{
 	MotorTurnsInto: "Dort macht der Motor aus {0} der Akkuleistung Vortrieb und aus {1} Wärme.",
 
 	ChargeIsLeft:    "Von der Ladung bleiben {0}.",
-	ChargeGaveOut:   "Der Akku gibt unter Last bei {0} auf; am Ende bleiben {1} der Ladung.",
+	ChargeGaveOut:   "Bei {0} gibt der Akku erstmals weniger her, als der Motor verlangt; am Ende bleiben {1} der Ladung.",
 	ChargeTrips:     "Eine volle Ladung reicht ohne den Rückhalt für {0} solche Fahrten.",
 	ChargeOneTrip:   "Eine volle Ladung reicht ohne den Rückhalt für eine solche Fahrt.",
 	ChargeNoTrip:    "Eine volle Ladung reicht ohne den Rückhalt nicht für eine solche Fahrt.",
@@ -82,7 +82,7 @@ var germanRide = [keys]string{
 	CautionFading:   "Eine Bremse wird bergab {0} warm und kann nachlassen: in Stößen bremsen und rechtzeitig pausieren.",
 	CautionWet:      "Nass: die Bremsen greifen später, die Reifen rutschen früher; vor dem Gefälle einmal anbremsen.",
 	CautionOverBars: "Bei einer Vollbremsung hebt das Hinterrad ab, ehe die Reifen rutschen: Gewicht nach hinten und tief, beide Bremsen.",
-	CautionSlides:   "Auf diesem Grund rutscht beim starken Bremsen zuerst der Vorderreifen: sanft, mit beiden Bremsen und aufrecht bremsen.",
+	CautionSlides:   "Bei einer Vollbremsung rutscht auf diesem Grund der Vorderreifen: sanft, mit beiden Bremsen und aufrecht bremsen.",
 	CautionCarries:  "Mit {0} Ladung steht das Rad später und hebt oder rutscht früher als leer.",
 	CautionTrailer:  "Ein Anhänger schiebt bergab: vor der Kurve und geradeaus bremsen.",
 
@@ -99,7 +99,7 @@ var germanRide = [keys]string{
 	LabelEfficiency:  "Wirkungsgrad des Motors dort",
 	LabelHeatShare:   "davon als Wärme verloren",
 	LabelChargeLeft:  "Ladung am Ende",
-	LabelGaveOut:     "Akku gibt auf bei",
+	LabelGaveOut:     "Akku gibt zuerst zu wenig bei",
 	LabelTrips:       "Fahrten mit voller Ladung",
 	LabelReserveLeft: "Kraftreserve mindestens",
 	LabelDown:        "Abfahrt",

@@ -54,7 +54,7 @@ func (v Voice) MotorLine(run *ride.Running) string {
 // manyTrips is how many trips on a charge are counted.
 const manyTrips = 99
 
-// ChargeLine says what charge is left, where the pack gave out, and how many
+// ChargeLine says what charge is left, where the pack gave too little, and how many
 // trips a full charge serves; "" where the pack gave nothing.
 func (v Voice) ChargeLine(a *ride.Answer) string {
 	if a.Energy.FromPackJ <= 0 && a.ChargeLeft > 0 && !a.CutOut {
@@ -62,7 +62,7 @@ func (v Voice) ChargeLine(a *ride.Answer) string {
 	}
 	text := v.Say(ChargeIsLeft, v.Percent(a.ChargeLeft))
 	if a.CutOut {
-		text = v.Say(ChargeGaveOut, v.Length(a.CutOutAtM), v.Percent(a.ChargeLeft))
+		text = v.Say(ChargeGaveOut, v.CutOutAt(a), v.Percent(a.ChargeLeft))
 	}
 	if a.Stalled && a.StalledTrip == 0 {
 		return text // no trip was finished
@@ -77,6 +77,11 @@ func (v Voice) ChargeLine(a *ride.Answer) string {
 		return text + " " + v.text(ChargeOneTrip)
 	}
 	return text + " " + v.text(ChargeNoTrip)
+}
+
+// CutOutAt tells where, and on which way, the pack first gave too little.
+func (v Voice) CutOutAt(a *ride.Answer) string {
+	return v.onWay(v.Length(a.CutOutAtM), a.CutOutTrip, a.CutOutBack, WhyAtBack, WhyAtTrip, WhyAtTripBack)
 }
 
 // LegsLine says whether the rider stays within what they hold for good, and
