@@ -220,7 +220,7 @@ func (c *balance) gap() dom.Parts {
 	default:
 		l.x, l.anchor = from-8, fromEnd
 	}
-	return dom.Parts{d.node(class), l.node()}
+	return dom.Parts{d.node(class), l.clamp(4, c.size.W-4).node()} // where it fits on neither side, over the line
 }
 
 // weight hangs on the scale at the wanted pull. It is a slider: a finger drags
