@@ -49,6 +49,11 @@ func AnswerJSON(r *rig.Rig, a *ride.Answer, why string) []byte {
 	} else {
 		w.null("stalled_at_m")
 	}
+	if a.Footed {
+		w.number("foot_down_at_m", a.FootedAtM)
+	} else {
+		w.null("foot_down_at_m")
+	}
 	w.number("winding_peak_c", a.WindingPeakC)
 	w.number("minutes_to_easing_off", a.EasingS/60)
 	w.number("charge_left", a.ChargeLeft)

@@ -12,8 +12,9 @@ import (
 type Verdict uint8
 
 // The verdicts. Clears: pull to spare on the hardest stretch (TightBelow or
-// more of it unused). Tight: it gets up, with little or only momentum to
-// spare. Short: it stops before the end.
+// more of it unused). Tight: it gets up, with little to spare, only by
+// momentum, or with a foot on the ground on the way. Short: it stops before the
+// end.
 const (
 	Clears Verdict = iota
 	Tight
@@ -192,14 +193,21 @@ type Answer struct {
 	StalledAtM  float64
 	StalledTrip int
 	StalledBack bool
+	// Footed tells that a foot goes down on the way and the rig starts again
+	// from rest, first at FootedAtM from the foot of the hill, on FootedTrip
+	// (from 0), FootedBack on the way back.
+	Footed     bool
+	FootedAtM  float64
+	FootedTrip int
+	FootedBack bool
 
 	WindingPeakC float64
 	// EasingS is how long the motor holds a steady climb of the hardest stretch
 	// from cold before it eases off [s], +Inf when it never does.
 	EasingS    float64
 	ChargeLeft float64
-	// CutOut tells that the pack gave less than the motor asked, first at
-	// CutOutAtM from the foot of the hill, on CutOutTrip (from 0), CutOutBack on
+	// CutOut tells that the pack gave out under load (less than a quarter of the
+	// motor's power), first at CutOutAtM from the foot of the hill, on CutOutTrip (from 0), CutOutBack on
 	// the way back.
 	CutOut     bool
 	CutOutAtM  float64

@@ -55,6 +55,7 @@ type tour struct {
 	hardest passing
 	used    float64 // charge used on the first trip
 	cut     int     // the way on which the pack first gave too little, while run.cutOut
+	foot    int     // the way on which a foot first went down, while run.footedAtM ≥ 0
 }
 
 // way is one way of the tour that has been ridden.
@@ -111,7 +112,7 @@ func (t *tour) way(p *hill.Profile, trip int, back bool) bool {
 		s.pause(t.opt.PauseS)
 	}
 	s.begin(p, len(t.ways) == 0)
-	hadCut := s.cutOut
+	hadCut, hadFoot := s.cutOut, s.footedAtM >= 0
 	done := true
 	for i := range p.Grade {
 		if done = s.piece(i); !done {
@@ -121,6 +122,9 @@ func (t *tour) way(p *hill.Profile, trip int, back bool) bool {
 	}
 	s.finish()
 	t.ways = append(t.ways, way{trip: trip, back: back, timeS: s.timeS - s.beganS, trace: s.trace})
+	if s.footedAtM >= 0 && !hadFoot {
+		t.foot = len(t.ways) - 1
+	}
 	if s.cutOut && !hadCut {
 		t.cut = len(t.ways) - 1
 	}
@@ -171,6 +175,10 @@ func (t *tour) answer() Answer {
 		on := t.ways[t.cut]
 		a.CutOutAtM, a.CutOutTrip, a.CutOutBack = t.fromFoot(s.cutOutAtM, on.back), on.trip, on.back
 	}
+	if s.footedAtM >= 0 {
+		on := t.ways[t.foot]
+		a.Footed, a.FootedAtM, a.FootedTrip, a.FootedBack = true, t.fromFoot(s.footedAtM, on.back), on.trip, on.back
+	}
 	p := t.profileOf(h.way)
 	at := placeOn(t.rig, p, h.piece)
 	a.Balance = Weigh(t.rig, at, &h.body)
@@ -179,6 +187,9 @@ func (t *tour) answer() Answer {
 	cold := t.rig.Fresh(t.opt.Charge) // a motor that is hot already asks less of itself
 	a.EasingS = easing(t.rig, at, &cold, t.opt.DownMps)
 	a.Verdict = verdict(s.stalled, a.Balance.Headroom())
+	if a.Footed && a.Verdict == Clears {
+		a.Verdict = Tight
+	}
 	a.TripsPerCharge = math.Inf(1)
 	if used := t.used; used > 1e-9 {
 		a.TripsPerCharge = math.Max(0, 1-t.opt.Reserve) / used

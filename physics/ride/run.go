@@ -17,6 +17,7 @@ type run struct {
 	stalled       bool
 	cutOut        bool
 	cutOutAtM     float64
+	footedAtM     float64 // where a foot first went down, along its way; −1 nowhere
 	windingPeakC  float64
 	reserveLeastJ float64
 
@@ -26,8 +27,12 @@ type run struct {
 	everyM   float64
 	passed   []Running  // how each piece was passed, at its slowest
 	headroom []float64  // at each piece, as it was passed
+	settles  []float64  // about the speed at which each piece settles; −1 not yet known
 	bodies   []rig.Body // the state in which each piece was left
 	strong   int        // the gear that pulls most at the slowest speed
+	onPiece  int
+	footings int     // how often a foot went down on this way
+	footM    float64 // where it did last
 }
 
 // state is what a step of the computation changes.
@@ -41,7 +46,7 @@ type state struct {
 }
 
 func newRun(r *rig.Rig, o Options) *run {
-	s := &run{rig: r, opt: o}
+	s := &run{rig: r, opt: o, footedAtM: -1}
 	s.body = r.Fresh(o.Charge)
 	s.windingPeakC, s.reserveLeastJ = s.body.WindingC, s.body.ReserveJ
 	s.kineticJ = 0.5 * r.InertialKg * o.StartMps * o.StartMps
@@ -61,6 +66,9 @@ func (s *run) begin(p *hill.Profile, first bool) {
 	s.passed = make([]Running, len(p.Grade))
 	s.headroom = make([]float64, len(p.Grade))
 	s.bodies = make([]rig.Body, len(p.Grade))
+	s.settles = make([]float64, len(p.Grade))
+	s.forget()
+	s.footings = 0
 	level := s.rig.At(&s.body, 0, 1)
 	s.strong = s.rig.StrongestGear(s.rig.Rider.HoldMps, &level)
 	if first {
@@ -70,17 +78,26 @@ func (s *run) begin(p *hill.Profile, first bool) {
 
 func (s *run) speed() float64 { return math.Sqrt(2 * s.kineticJ / s.rig.InertialKg) }
 
+// forget drops what is known of speeds ahead.
+func (s *run) forget() {
+	for i := range s.settles {
+		s.settles[i] = -1
+	}
+}
+
 // piece rides one piece of constant grade; false when the rig stalls on it.
 func (s *run) piece(i int) bool {
 	at := placeOn(s.rig, s.hill, i)
 	end := s.hill.EdgeM[i+1]
 	coast := wanted(s.rig, &at, s.opt.DownMps) < 0
 	now := s.rig.At(&s.body, at.sin, at.cos)
+	s.onPiece = i
 	s.mark(&at, &now, coast)
 	settled := false // passed[i] holds a speed that was not still rising
 	for s.atM < end {
 		now = s.rig.At(&s.body, at.sin, at.cos)
-		s.shift.choose(s.rig, s.speed(), &s.body, &now)
+		s.choose(&now)
+		s.seePack(&now, coast)
 		before, shifting := s.speed(), s.shift.under()
 		s.advance(&at, &now, end, coast)
 		after := s.speed()
@@ -89,6 +106,10 @@ func (s *run) piece(i int) bool {
 			settled = settled || falling
 		}
 		if s.hasStalled(before, after) {
+			if s.restart(&at, &now, coast) {
+				settled, s.passed[i] = false, Running{}
+				continue
+			}
 			s.stalled = true
 			break
 		}
@@ -149,7 +170,7 @@ func (s *run) advance(at *Place, now *rig.Now, end float64, coast bool) {
 			s.atM = end
 		}
 		after := s.speed()
-		happened := s.shift.wants(s.rig, after, now) || s.hasStalled(before, after) || was.shift.endedBefore(s.timeS-was.timeS)
+		happened := s.wantsShift(now) || s.hasStalled(before, after) || was.shift.endedBefore(s.timeS-was.timeS)
 		if h < closeM || !happened {
 			return
 		}

@@ -13,6 +13,9 @@ const (
 	backAgain  = 1.06    // gain for which the last change is undone
 	legs       = 0.08    // how much nearer to the liked cadence a gear must bring
 	easedTo    = 1 / 3.0 // part of the pull that is kept while the chain moves
+	saveSpeed  = 1.1     // of the slowest speed, below which nobody changes up
+	aheadS     = 3.0     // how far ahead a rider looks for what is steep
+	spinning   = 0.95    // of the highest cadence, to which a rider changes down
 )
 
 // shifter is the gear in use and the hand on the lever.
@@ -23,10 +26,11 @@ type shifter struct {
 	table      *gearTable
 }
 
-// gearTable keeps the best gear by speed, in steps of wishStep; −1 where it is
-// not yet known. It holds for limits like those it was made for.
+// gearTable keeps the best gear by speed and its pull, in steps of wishStep; −1
+// where they are not yet known. It holds for limits like those it was made for.
 type gearTable struct {
 	wish [wishes]int8
+	pull [wishes]float64
 	now  rig.Now
 }
 
@@ -59,42 +63,60 @@ func (t *gearTable) stale(now *rig.Now) bool {
 		math.Abs(now.RiderW-t.now.RiderW) > 0.1*t.now.RiderW
 }
 
+// at makes sure that a step of the table is known.
+func (t *gearTable) at(r *rig.Rig, i int) {
+	if t.wish[i] < 0 {
+		v := (float64(i) + 0.5) * wishStep
+		gear := r.BestGear(v, &t.now)
+		t.wish[i], t.pull[i] = int8(gear), r.PullAt(v, gear, &t.now).Sum()
+	}
+}
+
+// settles is about the speed at which a road settles [m/s] that wants a load
+// of given newtons at a speed; 0 where it is not held.
+func (t *gearTable) settles(r *rig.Rig, load func(v float64) float64) float64 {
+	for i := range t.wish {
+		t.at(r, i)
+		if v := (float64(i) + 0.5) * wishStep; t.pull[i] < load(v) {
+			return v - wishStep
+		}
+	}
+	return wishes * wishStep
+}
+
 func (s *shifter) best(r *rig.Rig, v float64) int {
 	i := min(int(v/wishStep), wishes-1)
-	if s.table.wish[i] < 0 {
-		s.table.wish[i] = int8(r.BestGear((float64(i)+0.5)*wishStep, &s.table.now))
-	}
+	s.table.at(r, i)
 	return int(s.table.wish[i])
 }
 
-// choose begins a shift where one is wanted.
-func (s *shifter) choose(r *rig.Rig, v float64, body *rig.Body, now *rig.Now) {
-	if s.table.stale(now) {
-		s.table.renew(r, body)
-	}
-	if s.wants(r, v, now) {
-		s.from, s.gear = s.gear, s.best(r, v)
-		s.leftS, s.sinceS = r.Bike.ShiftS, 0
-	}
-}
-
-// wants tells whether the rider would shift now: where another gear pulls
-// enough more, or suits the legs better, or the cadence has left their range.
-func (s *shifter) wants(r *rig.Rig, v float64, now *rig.Now) bool {
+// wants tells whether the rider would shift now, and to which gear: where it
+// pulls enough more, or suits the legs better, or the cadence has left their
+// range. aimMps is the speed that the rider has in mind [m/s]: their own, or on
+// the way into something steep a lower one, for which they change down in time.
+// costs is what a shift takes of the speed [m/s]: nobody changes up where it
+// would stop them.
+func (s *shifter) wants(r *rig.Rig, v, aimMps, costs float64, now *rig.Now) (to int, wants bool) {
 	if s.under() || s.sinceS < restS {
-		return false
+		return s.gear, false
 	}
-	to := s.best(r, v)
-	if to == s.gear {
-		return false
+	to = s.best(r, aimMps)
+	if to == s.gear || to > s.gear && v-costs < saveSpeed*r.Rider.HoldMps {
+		return s.gear, false
 	}
 	need, nearer := worthwhile, legs
 	if to == s.from {
 		need, nearer = backAgain, 3*legs
 	}
-	return !s.suits(r, v) ||
-		r.OffLiked(v, s.gear)-r.OffLiked(v, to) >= nearer ||
-		r.PullAt(v, to, now).Sum() >= need*r.PullAt(v, s.gear, now).Sum()
+	return to, !s.suits(r, v) ||
+		r.OffLiked(aimMps, s.gear)-r.OffLiked(aimMps, to) >= nearer ||
+		r.PullAt(aimMps, to, now).Sum() >= need*r.PullAt(aimMps, s.gear, now).Sum()
+}
+
+// shiftTo begins a shift.
+func (s *shifter) shiftTo(r *rig.Rig, gear int) {
+	s.from, s.gear = s.gear, gear
+	s.leftS, s.sinceS = r.Bike.ShiftS, 0
 }
 
 func (s *shifter) suits(r *rig.Rig, v float64) bool {

@@ -84,10 +84,7 @@ func (s *run) recover(c slow, spin float64) (f motor.Flow, brakedJ float64) {
 // charge draws a flow's power from the pack.
 func (s *run) charge(f *motor.Flow, dt float64) {
 	r, b := s.rig, &s.body
-	amps, ok := r.Pack.Current(f.ElectricW, b.Charge, b.RelaxV, r.PackC)
-	if f.OutputW > 0 && (!ok || b.Charge <= 0) && !s.cutOut {
-		s.cutOut, s.cutOutAtM = true, s.atM
-	}
+	amps, _ := r.Pack.Current(f.ElectricW, b.Charge, b.RelaxV, r.PackC)
 	open := r.Pack.OpenV(b.Charge)
 	s.sums.ChemicalJ += open * amps * dt
 	s.sums.PackHeatJ += (open*amps - f.ElectricW) * dt

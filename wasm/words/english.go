@@ -417,6 +417,7 @@ var englishPage = [keys]string{
 	WhyStopsAtFoot: "It does not get away from the foot.",
 	WhyGivesUp:     "It becomes too slow there to keep its balance.",
 
+	WhyFootDown:    "At {0} a foot goes down: from rest, in an easier gear, it goes on.",
 	WhyStopsThough: "It stops at {0} all the same: it became too slow to keep its balance.",
 
 	WhySpeed:    "At its slowest there it rides {0}; {1} sets that speed.",

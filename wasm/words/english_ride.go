@@ -47,7 +47,7 @@ var englishRide = [keys]string{
 	MotorTurnsInto: "There the motor turns {0} of the pack's power into pull and {1} into heat.",
 
 	ChargeIsLeft:    "{0} of the charge is left.",
-	ChargeGaveOut:   "At {0} the pack begins to give less than the motor asks; in the end {1} of its charge is left.",
+	ChargeGaveOut:   "At {0} the pack gives out under load; in the end {1} of its charge is left.",
 	ChargeTrips:     "A full charge serves {0} such trips, less what is kept back.",
 	ChargeOneTrip:   "A full charge serves one such trip, less what is kept back.",
 	ChargeNoTrip:    "A full charge, less what is kept back, does not serve one such trip.",

@@ -417,6 +417,7 @@ var germanPage = [keys]string{
 	WhyStopsAtFoot: "Es kommt unten nicht vom Fleck.",
 	WhyGivesUp:     "Dort wird es zu langsam, um die Balance zu halten.",
 
+	WhyFootDown:    "Bei {0} muss ein Fuß auf den Boden: aus dem Stand, im leichteren Gang, geht es weiter.",
 	WhyStopsThough: "Bei {0} bleibt es trotzdem stehen: zu langsam für die Balance.",
 
 	WhySpeed:    "Das Tempo dort, mindestens {0}, bestimmt {1}.",

@@ -47,7 +47,7 @@ var germanRide = [keys]string{
 	MotorTurnsInto: "Dort macht der Motor aus {0} der Akkuleistung Vortrieb und aus {1} Wärme.",
 
 	ChargeIsLeft:    "Von der Ladung bleiben {0}.",
-	ChargeGaveOut:   "Bei {0} gibt der Akku erstmals weniger her, als der Motor verlangt; am Ende bleiben {1} der Ladung.",
+	ChargeGaveOut:   "Bei {0} bricht der Akku unter Last ein; am Ende bleiben {1} der Ladung.",
 	ChargeTrips:     "Eine volle Ladung reicht ohne den Rückhalt für {0} solche Fahrten.",
 	ChargeOneTrip:   "Eine volle Ladung reicht ohne den Rückhalt für eine solche Fahrt.",
 	ChargeNoTrip:    "Eine volle Ladung reicht ohne den Rückhalt nicht für eine solche Fahrt.",

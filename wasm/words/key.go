@@ -498,6 +498,9 @@ const (
 	WhyStopsAtFoot
 	WhyGivesUp
 
+	// WhyFootDown: where a foot goes down and it starts again from rest.
+	WhyFootDown
+
 	// WhyStopsThough: where, though there was pull for the hardest place.
 	WhyStopsThough
 

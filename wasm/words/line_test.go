@@ -116,7 +116,7 @@ func TestLines(t *testing.T) {
 		{func(v Voice) string {
 			return v.ChargeLine(&ride.Answer{Energy: works, ChargeLeft: 0.11, CutOut: true, CutOutAtM: 640, Stalled: true})
 		},
-			"At 640 m the pack begins to give less than the motor asks; in the end 11 % of its charge is left.", "Bei 640 m gibt der Akku erstmals weniger her, als der Motor verlangt; am Ende bleiben 11 % der Ladung."},
+			"At 640 m the pack gives out under load; in the end 11 % of its charge is left.", "Bei 640 m bricht der Akku unter Last ein; am Ende bleiben 11 % der Ladung."},
 		{func(v Voice) string { return v.ChargeLine(&ride.Answer{ChargeLeft: 1, TripsPerCharge: inf}) }, "", ""},
 		{func(v Voice) string { return v.LegsLine(r, &ride.Answer{ReserveLeftJ: 12000}) },
 			"The rider pedals 110 W at most, below the 160 W that they hold for good.", "Getreten werden höchstens 110 W, weniger als die 160 W, die auf Dauer gehen."},

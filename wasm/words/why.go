@@ -28,6 +28,8 @@ func (v Voice) Why(r *rig.Rig, a *ride.Answer) string {
 		return first + " " + v.stops(r, a)
 	case a.Verdict == ride.Short:
 		return first + " " + v.Say(WhyGivesUp)
+	case a.Footed:
+		return first + " " + v.Say(WhyFootDown, v.onWay(v.Length(a.FootedAtM), a.FootedTrip, a.FootedBack, WhyAtBack, WhyAtTrip, WhyAtTripBack))
 	}
 	return first + " " + v.speed(r, b, in, &a.Hardest.Running)
 }
