@@ -5,7 +5,6 @@ package device
 import (
 	"bytes"
 	"syscall/js"
-	"time"
 
 	"hillwright/physics/hill"
 	"hillwright/wasm/keep"
@@ -33,15 +32,15 @@ func Work() {
 	}
 }
 
-// tellEvery is how often progress is told.
-const tellEvery = 60 * time.Millisecond
+// tellEvery is how often progress is told [ms].
+const tellEvery = 60
 
 func answerRequest(request js.Value) {
 	id := request.Get("id").Int()
-	told := time.Now()
+	told := nowMs()
 	t := readTrack(bytesOf(request.Get("track")), func(part float64) bool {
-		if time.Since(told) > tellEvery {
-			told = time.Now()
+		if now := nowMs(); now-told > tellEvery {
+			told = now
 			js.Global().Call("postMessage", map[string]any{"id": id, "part": part})
 		}
 		return true

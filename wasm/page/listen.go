@@ -4,8 +4,8 @@ package page
 
 import (
 	"syscall/js"
-	"time"
 
+	"hillwright/wasm/device"
 	"hillwright/wasm/state"
 )
 
@@ -121,10 +121,10 @@ func (h *hand) key(e js.Value) {
 	}
 }
 
-// Holding a stepper's button steps on by itself.
+// Holding a stepper's button steps on by itself [ms].
 const (
-	holdFor   = 450 * time.Millisecond
-	stepEvery = 90 * time.Millisecond
+	holdFor   = 450
+	stepEvery = 90
 )
 
 func (h *hand) down(e js.Value) {
@@ -137,17 +137,18 @@ func (h *hand) down(e js.Value) {
 		h.move(e)
 	case act == state.StepUp || act == state.StepDown || act == state.StaffStep:
 		h.repeats++
-		go h.repeat(h.repeats, state.Action{Name: act, Arg: arg})
+		press := h.repeats
+		device.After(holdFor, func() { h.repeat(press, state.Action{Name: act, Arg: arg}) })
 	}
 }
 
 func (h *hand) repeat(press int, a state.Action) {
-	time.Sleep(holdFor)
-	for press == h.repeats {
-		h.repeated = true
-		h.do(a)
-		time.Sleep(stepEvery)
+	if press != h.repeats {
+		return
 	}
+	h.repeated = true
+	h.do(a)
+	device.After(stepEvery, func() { h.repeat(press, a) })
 }
 
 func (h *hand) move(e js.Value) {

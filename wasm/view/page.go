@@ -42,11 +42,13 @@ type viewer struct {
 	words.Voice
 }
 
-func (v *viewer) say(k words.Key, args ...string) Text { return Text(v.Voice.Say(k, args...)) }
+func (v *viewer) say(k words.Key, args ...string) Part { return Text(v.Voice.Say(k, args...)) }
 
 // region is a part of the page that is rendered anew by itself.
 func region(tag, name string, parts ...Part) *Node {
-	return El(tag, ID(name), With("data-region", name), Parts(parts))
+	n := El(tag, ID(name), With("data-region", name))
+	n.Add(parts...)
+	return n
 }
 
 // heading is a part's heading, for ears only where the look needs none.
@@ -56,10 +58,12 @@ func (v *viewer) heading(k words.Key, class string) *Node {
 
 // button is a thing to touch that is not a blank of the sentence.
 func button(class, act, arg string, parts ...Part) *Node {
-	return El("button", With("type", "button"), Class(class), Act(act, arg), Parts(parts))
+	n := El("button", With("type", "button"), Class(class), Act(act, arg))
+	n.Add(parts...)
+	return n
 }
 
-func flag(name string, yes bool) Attr {
+func flag(name string, yes bool) Part {
 	if yes {
 		return With(name, "true")
 	}

@@ -42,7 +42,7 @@ func putStaff(picture *Node, at draw.Staff) {
 		if class, _ := n.Attr("class"); class != "staff" {
 			return
 		}
-		kept := []Attr{With("data-region", "staff"), With("transform", at.Transform())}
+		kept := []Attr{{Name: "data-region", Value: "staff"}, {Name: "transform", Value: at.Transform()}}
 		for _, a := range n.Attrs {
 			if a.Name != "visibility" && a.Name != "transform" {
 				kept = append(kept, a)
