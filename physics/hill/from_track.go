@@ -148,8 +148,8 @@ func (w *way) bearings(pieces int, spacingM float64) []float64 {
 	from := at(0)
 	for k := range out {
 		to := at(float64(k+1) * spacingM)
-		if d, bearing, _ := leg(&from, &to); d > 0.01 {
-			out[k] = bearing
+		if leg(&from, &to) > 0.01 {
+			out[k] = bearing(&from, &to)
 		} else if k > 0 {
 			out[k] = out[k-1]
 		}

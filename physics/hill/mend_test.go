@@ -208,17 +208,17 @@ func TestStraightRoadHoldsWhateverTheSampling(t *testing.T) {
 			lat = -lat
 		}
 		lon := rapid.Float64Range(-180, 180).Draw(t, "longitude")
-		bearing := rapid.Float64Range(0, 2*math.Pi).Draw(t, "bearing")
+		course := rapid.Float64Range(0, 2*math.Pi).Draw(t, "course")
 		grade := rapid.Float64Range(-0.25, 0.25).Draw(t, "grade")
 		x := 0.0
 		var tr Track
 		tr.SegmentStart = []int{0}
 		for x < 1500 {
 			// On a sphere of the local radius, good to a few parts in 1000 here.
-			p := Point{LatDeg: lat + x*math.Cos(bearing)/111_200, TimeS: x / 4}
-			p.LonDeg = math.Mod(lon+x*math.Sin(bearing)/111_320/math.Cos(p.LatDeg*math.Pi/180)+540, 360) - 180
+			p := Point{LatDeg: lat + x*math.Cos(course)/111_200, TimeS: x / 4}
+			p.LonDeg = math.Mod(lon+x*math.Sin(course)/111_320/math.Cos(p.LatDeg*math.Pi/180)+540, 360) - 180
 			if n := len(tr.Points); n > 0 {
-				d, _, _ := leg(&tr.Points[n-1], &p)
+				d := leg(&tr.Points[n-1], &p)
 				p.HeightM = tr.Points[n-1].HeightM + grade*d
 			} else {
 				p.HeightM = 100.37
@@ -227,7 +227,7 @@ func TestStraightRoadHoldsWhateverTheSampling(t *testing.T) {
 			x += rapid.Float64Range(2, 30).Draw(t, "step")
 		}
 		n := len(tr.Points)
-		direct, toEnd, _ := leg(&tr.Points[0], &tr.Points[n-1])
+		direct, toEnd := leg(&tr.Points[0], &tr.Points[n-1]), bearing(&tr.Points[0], &tr.Points[n-1])
 		p, err := FromTrack(&tr, Options{})
 		if err != nil {
 			t.Fatal(err)
