@@ -158,6 +158,53 @@ func TestHoleBetweenSegmentsLeavesNoWall(t *testing.T) {
 	}
 }
 
+// The recorder's height drifts up by 30 m while the rider stands for three
+// minutes: no wall, and the climb behind it is as high as it is.
+func TestDriftWhileStandingLeavesNoWall(t *testing.T) {
+	tr := climb(201, 10, 2, 0.06)
+	for i := 100; i < len(tr.Points); i++ {
+		tr.Points[i].HeightM += 30
+		tr.Points[i].TimeS += 180
+	}
+	p := mustProfile(t, &tr)
+	if math.Abs(p.AscentM()-119.4) > 0.5 || noteOf(&p, NoteSpike).Count != 1 {
+		t.Errorf("ascent %.2f m, want 119.4; notes %v", p.AscentM(), p.Notes)
+	}
+}
+
+// Every 25th height is 4 m off: such heights weigh nothing.
+func TestOutlyingHeightsWeighNothing(t *testing.T) {
+	tr := climb(201, 10, 2, 0.06)
+	for i := 10; i < len(tr.Points); i += 25 {
+		tr.Points[i].HeightM += 4
+	}
+	p := mustProfile(t, &tr)
+	for i, g := range p.Grade {
+		if math.Abs(float64(g)-0.06) > 0.002 {
+			t.Errorf("piece %d has grade %.4f, want 0.06", i, g)
+		}
+	}
+}
+
+// Over the crest of a hill 500 m have no heights: the curve may not swing up
+// there, where nothing is known, but goes straight across.
+func TestCurveGoesStraightOverAHole(t *testing.T) {
+	tr := climb(201, 10, 2, 0.10)
+	for i := range tr.Points {
+		x := float64(i) * 10
+		tr.Points[i].HeightM = 400.25 + 0.10*math.Min(x, 2000-x)
+		if x > 750 && x < 1250 {
+			tr.Points[i].HeightM = math.NaN()
+		}
+	}
+	p := mustProfile(t, &tr)
+	for s := 800.0; s < 1200; s += 10 {
+		if g := float64(p.GradeAt(s)); math.Abs(g) > 0.002 {
+			t.Errorf("at %g m the grade is %.4f, want 0", s, g)
+		}
+	}
+}
+
 func TestTooShortAndBadOptions(t *testing.T) {
 	still := climb(50, 0.01, 1, 0)
 	long := climb(201, 10, 2, 0.06)
