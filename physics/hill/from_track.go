@@ -74,8 +74,8 @@ func cut(totalM, wantedM, usualM float64) (pieces int, spacingM float64) {
 
 // data gives one height for each stretch around a node that has points: their
 // mean, at their mean place. So a place counts the same however densely it was
-// recorded. Nodes in a hole between heights get one straight across, of little
-// weight, so that the curve does not swing there.
+// recorded. Nodes in a hole between heights get one straight across, of half
+// the weight, so that the curve does not swing there.
 func (w *way) data(pieces int, spacingM float64) []datum {
 	var out []datum
 	place := func(atM, height float64, filled bool) datum {

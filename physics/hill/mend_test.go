@@ -245,6 +245,20 @@ func TestOptions(t *testing.T) {
 	}
 }
 
+// The stiffest curve that options allow is still solved well.
+func TestStiffestCurveKeepsAnEvenClimb(t *testing.T) {
+	tr := climb(1001, 10, 2, 0.06)
+	p, err := FromTrack(&tr, Options{SmoothM: 500, PieceM: 1})
+	if err != nil {
+		t.Fatal(err)
+	}
+	for i, g := range p.Grade {
+		if math.Abs(float64(g)-0.06) > 1e-3 {
+			t.Fatalf("piece %d has grade %.6f, want 0.06", i, g)
+		}
+	}
+}
+
 // A straight even road keeps its length and ascent whatever the spacing of its
 // points, its place and its direction; every profile is sound and the bearing
 // is that of the way.
