@@ -83,7 +83,7 @@ func (v *viewer) masthead() *Node {
 	}
 	return region("header", "masthead", Class("masthead"),
 		El("h1", Text(v.Shop.Name)),
-		El("div", Class("openers"), opener(state.PlaceKept, words.HeadKept), opener(state.PlaceSettings, words.HeadSettings)),
+		El("div", Class("openers"), opener(state.PlaceKept, words.OpenKept), opener(state.PlaceSettings, words.HeadSettings)),
 		If(v.Device.Waiting, El("p", Class("waiting"), With("role", "status"),
 			v.say(words.NewVersion), Text(" "), button("plain", state.UseNew, "", v.say(words.ButtonUseNew)))),
 	)

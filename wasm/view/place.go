@@ -227,13 +227,16 @@ func (v *viewer) sectionsNote(chosen bool) Part {
 // just reaches its top, or ends in it.
 func (v *viewer) shape() *Node {
 	roads := map[string]string{
-		"clears": "M3 27L23 9Q27 5 31 9L45 21",
-		"tight":  "M3 27L25 7",
-		"short":  "M3 27L14 17M10 13L18 21",
+		"clears": "M3 28C16 28 17 6 24 6S32 28 45 28",
+		"tight":  "M3 28C16 28 17 6 24 6",
+		"short":  "M3 28C10 28 13 22 15.5 17M10.5 14L20.5 19.5",
 	}
+	ends := map[string]string{"clears": "45 28", "tight": "24 6"}
+	end := ends[v.Answer.Verdict.String()]
 	return SVG(Class("shape"), With("viewBox", "0 0 48 32"), With("width", "48"), With("height", "32"), With("aria-hidden", "true"),
-		El("path", Class("shape-hill"), With("d", "M1 31L24 10L47 31Z")),
-		El("path", Class("shape-road"), With("d", roads[v.Answer.Verdict.String()])))
+		El("path", Class("shape-hill"), With("d", "M1 28H47M3 28C16 28 17 6 24 6S32 28 45 28")),
+		El("path", Class("shape-road"), With("d", roads[v.Answer.Verdict.String()])),
+		If(end != "", El("path", Class("shape-end"), With("d", "M"+end+"h0"))))
 }
 
 // swatches explain the hatching.

@@ -33,6 +33,7 @@ var english = [keys]string{
 	HeadDay:      "Day",
 	HeadRide:     "Ride",
 	HeadKept:     "Kept on this device",
+	OpenKept:     "my things",
 	HeadSettings: "Settings",
 	HeadCautions: "Before riding",
 
