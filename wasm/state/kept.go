@@ -166,7 +166,8 @@ func (s *State) putHill(h keep.Hill, now int64) {
 }
 
 // forget takes one of the person's own things away; when it was chosen, the
-// first of its kind that is left is chosen.
+// first of its kind that is left is chosen. Without any the inputs stay as they
+// are.
 func (s *State) forget(kind keep.Kind, id string) {
 	if !s.IsOwn(kind, id) {
 		return
@@ -198,11 +199,12 @@ func (s *State) chooseFirst(kind keep.Kind) {
 		s.chooseHill(id)
 		return
 	}
+	if all := s.Things(kind); len(all) > 0 {
+		s.take(kind, all[0].ID)
+		return
+	}
 	delete(s.Chosen, kind)
 	s.rebase()
-	if all := s.Things(kind); len(all) > 0 {
-		s.choose(kind, all[0].ID)
-	}
 }
 
 func without[T any](list []T, at int) []T {

@@ -3,6 +3,7 @@ package view
 import (
 	"strings"
 
+	"hillwright/physics/ride"
 	. "hillwright/wasm/dom"
 	"hillwright/wasm/draw"
 	"hillwright/wasm/keep"
@@ -87,7 +88,7 @@ func (v *viewer) choice(kind keep.Kind, id, name, inShort string) *Node {
 	return El("li", button("choice", state.Choose, string(kind)+":"+id, flag("aria-pressed", chosen),
 		tick(chosen),
 		El("span", Class("choice-name"), Text(name),
-			If(v.IsOwn(kind, id), El("span", Class("own"), Text(" · "), v.say(words.HeadKept))),
+			If(v.IsOwn(kind, id), El("span", Class("own"), Text(" · "), v.say(words.OpenKept))),
 			If(chosen && v.AnyChanged(kind), El("span", Class("own"), Text(" · "), v.say(words.KeptChanged)))),
 		If(inShort != "", El("span", Class("in-short"), Text(inShort)))))
 }
@@ -226,17 +227,18 @@ func (v *viewer) sectionsNote(chosen bool) Part {
 // shape is the answer's shape beside its word: a road that goes over the hill,
 // just reaches its top, or ends in it.
 func (v *viewer) shape() *Node {
-	roads := map[string]string{
-		"clears": "M3 28C16 28 17 6 24 6S32 28 45 28",
-		"tight":  "M3 28C16 28 17 6 24 6",
-		"short":  "M3 28C10 28 13 22 15.5 17M10.5 14L20.5 19.5",
+	const hill = "M3 28C12 27 16 10 26 8C33 7 37 14 45 15"
+	road, x, y := hill, "43", "14.7"
+	switch v.Answer.Verdict {
+	case ride.Tight:
+		road, x, y = "M3 28C12 27 16 10 26 8", "26", "8"
+	case ride.Short:
+		road, x, y = "M3 28C7.5 27.5 10.5 23 13.5 18.5M8 14.5L18.5 22.5", "", ""
 	}
-	ends := map[string]string{"clears": "45 28", "tight": "24 6"}
-	end := ends[v.Answer.Verdict.String()]
 	return SVG(Class("shape"), With("viewBox", "0 0 48 32"), With("width", "48"), With("height", "32"), With("aria-hidden", "true"),
-		El("path", Class("shape-hill"), With("d", "M1 28H47M3 28C16 28 17 6 24 6S32 28 45 28")),
-		El("path", Class("shape-road"), With("d", roads[v.Answer.Verdict.String()])),
-		If(end != "", El("path", Class("shape-end"), With("d", "M"+end+"h0"))))
+		El("path", Class("shape-hill"), With("d", hill+"M3 30H45")),
+		El("path", Class("shape-road"), With("d", road)),
+		If(x != "", El("circle", Class("shape-end"), With("cx", x), With("cy", y), With("r", "4.5"))))
 }
 
 // swatches explain the hatching.
