@@ -16,6 +16,7 @@ func (s *State) doKept(a Action) (bool, []Effect) {
 		s.Name = a.Text
 	case Keep:
 		s.keep(keep.Kind(a.Arg), a.Now)
+		return true, []Effect{{Kind: Show, Key: "blank-" + a.Arg}}
 	case Forget:
 		kind, id := cut(a.Arg, ":")
 		s.forget(keep.Kind(kind), id)
