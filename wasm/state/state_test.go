@@ -104,6 +104,7 @@ func TestActions(t *testing.T) {
 		{"theme", []Action{{Name: SetTheme, Arg: "dusk"}, {Name: SetTheme, Arg: "device"}}, func(s *State) bool { return s.Theme == "" }},
 		{"open and close", []Action{{Name: Open, Arg: "bike"}, {Name: Open, Arg: "bike"}}, func(s *State) bool { return s.Place == "" }},
 		{"one thing at a time", []Action{{Name: Open, Arg: "bike"}, {Name: ShowPath, Arg: mass}}, func(s *State) bool { return s.Place == "rider" && s.Path == mass }},
+		{"refused storage is told once", []Action{{Name: Stored, Arg: "refused"}, {Name: Dismiss}, {Name: Stored, Arg: "refused"}}, func(s *State) bool { return s.Device.Storage == "refused" && !s.Message.Set }},
 		{"a name too long", []Action{{Name: TypeName, Arg: "bike", Text: big}, {Name: Keep, Arg: "bike"}}, func(s *State) bool { return len(s.Own.Things[0].Names[""]) <= longestName }},
 		{"no name, nothing kept", []Action{{Name: TypeName, Arg: "bike", Text: "  "}, {Name: Keep, Arg: "bike"}}, func(s *State) bool { return len(s.Own.Things) == 0 }},
 		{"an unknown action", []Action{{Name: "dance"}}, func(s *State) bool { return s.Answer != nil }},

@@ -233,7 +233,7 @@ func (v *viewer) shape() *Node {
 	case ride.Tight:
 		road, x, y = "M3 28C12 27 16 10 26 8", "26", "8"
 	case ride.Short:
-		road, x, y = "M3 28C7.5 27.5 10.5 23 13.5 18.5M8 14.5L18.5 22.5", "", ""
+		road, x, y = "M3 28C9 27 12 22 16 16M10 12L22 20", "", ""
 	}
 	return SVG(Class("shape"), With("viewBox", "0 0 48 32"), With("width", "48"), With("height", "32"), With("aria-hidden", "true"),
 		El("path", Class("shape-hill"), With("d", hill+"M3 30H45")),
