@@ -48,8 +48,14 @@ func answerRequest(request js.Value) {
 	js.Global().Call("postMessage", messageOf(id, t))
 }
 
-// readTrack makes a hill of a track file.
-func readTrack(data []byte, progress func(float64) bool) Track {
+// readTrack makes a hill of a track file. A failure in our own program is an
+// error of this file alone: the page goes on.
+func readTrack(data []byte, progress func(float64) bool) (t Track) {
+	defer func() {
+		if failed := recover(); failed != nil {
+			t = Track{Err: workerError("the program failed on this file; please keep it for whoever mends the program")}
+		}
+	}()
 	track, err := hill.ReadTrack(bytes.NewReader(data), progress)
 	if err != nil {
 		return Track{Err: err}
@@ -106,7 +112,7 @@ func trackOf(message js.Value) Track {
 	return Track{Hill: &p}
 }
 
-// workerError is an error that came as text alone.
+// workerError is an error of which there is only a text.
 type workerError string
 
 func (e workerError) Error() string { return string(e) }

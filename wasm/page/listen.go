@@ -30,6 +30,11 @@ func (p *page) listen() {
 		{"drop", h.drop},
 	} {
 		js.Global().Get("document").Call("addEventListener", each.event, js.FuncOf(func(_ js.Value, args []js.Value) any {
+			defer func() {
+				if failed := recover(); failed != nil {
+					p.broke(report(each.event, failed))
+				}
+			}()
 			each.take(args[0])
 			return nil
 		}))
