@@ -13,7 +13,8 @@ import (
 // compress gives every file that gains by it a gzip and a brotli sibling. The
 // files are independent of each other, so all processors work at once; the
 // outcome does not depend on their order.
-func (p *Page) compress() error {
+// cache is where brotli's work is kept, "" for nowhere.
+func (p *Page) compress(cache string) error {
 	files := p.Files()
 	errs := make([]error, len(files))
 	var running sync.WaitGroup
@@ -26,7 +27,7 @@ func (p *Page) compress() error {
 		free <- struct{}{}
 		go func() {
 			defer running.Done()
-			errs[i] = f.compress()
+			errs[i] = f.compress(cache)
 			<-free
 		}()
 	}
@@ -39,17 +40,19 @@ func (p *Page) compress() error {
 	return nil
 }
 
-func (f *File) compress() error {
+func (f *File) compress(cache string) error {
 	zipped, err := squeezed(f.Data, func(w io.Writer) (io.WriteCloser, error) {
 		return gzip.NewWriterLevel(w, gzip.BestCompression)
 	})
 	if err != nil {
 		return err
 	}
-	small, err := squeezed(f.Data, func(w io.Writer) (io.WriteCloser, error) {
-		return brotli.NewWriterOptions(w, brotli.WriterOptions{Quality: brotli.BestCompression, LGWin: 22}), nil
+	f.Gzip = zipped
+	f.Brotli, err = cached(cache, f, func() ([]byte, error) {
+		return squeezed(f.Data, func(w io.Writer) (io.WriteCloser, error) {
+			return brotli.NewWriterOptions(w, brotli.WriterOptions{Quality: brotli.BestCompression, LGWin: 22}), nil
+		})
 	})
-	f.Gzip, f.Brotli = zipped, small
 	return err
 }
 

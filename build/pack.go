@@ -13,12 +13,15 @@ import (
 
 // Parts is what a page is made of. Site holds the shell, the styles and the
 // scripts (site.Files); Shop is what shop.Read gave; Program is what Compile
-// gave; Budget is what the page may weigh.
+// gave; Budget is what the page may weigh; Cache is a folder in which brotli's
+// work on the wasm file, the longest of all, is kept from pack to pack, "" for
+// none.
 type Parts struct {
 	Site    fs.FS
 	Shop    shop.Copy
 	Program Program
 	Budget  Budget
+	Cache   string
 }
 
 // Pack makes the page in the folder out, which is replaced as a whole when it
@@ -30,7 +33,7 @@ func Pack(parts Parts, out string) (*Report, error) {
 	if err != nil {
 		return nil, err
 	}
-	if err := page.compress(); err != nil {
+	if err := page.compress(parts.Cache); err != nil {
 		return nil, err
 	}
 	report := weigh(page, parts.Budget)

@@ -54,7 +54,7 @@ var one = sync.OnceValues(func() (*Page, error) {
 	if err != nil {
 		return nil, err
 	}
-	return page, page.compress()
+	return page, page.compress("")
 })
 
 func assemble(t testing.TB) *Page {

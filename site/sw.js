@@ -66,8 +66,8 @@ async function answer(request, url) {
   try {
     return await fetch(request);
   } catch (error) {
-    const isPage = request.mode === "navigate" && !/\.(js|wasm)$/.test(url.pathname);
-    if (isPage) return Response.redirect(SCOPE);
+    const elsewhere = request.mode === "navigate" && page !== SCOPE && !/\.(js|wasm)$/.test(url.pathname);
+    if (elsewhere) return Response.redirect(SCOPE);
     throw error;
   }
 }

@@ -6,6 +6,7 @@
 
 self.hillwrightWorker = true;
 self.hillwrightEarly = [];
+self.document = {}; // the program's UI library refuses to load where the name is unknown
 
 self.addEventListener("message", function first({ data }) {
   self.removeEventListener("message", first);
@@ -17,5 +18,8 @@ self.addEventListener("message", function first({ data }) {
   const go = new Go();
   // A failure reaches the page as the worker's error event.
   const fail = (error) => setTimeout(() => { throw error; });
-  WebAssembly.instantiate(data.module, go.importObject).then((instance) => go.run(instance)).catch(fail);
+  WebAssembly.instantiate(data.module, go.importObject)
+    .then((instance) => go.run(instance))
+    .then(() => { throw new Error("the program beside the page has stopped"); })
+    .catch(fail);
 });

@@ -363,6 +363,12 @@ func TestNewBuildIsOfferedAndNeverMixed(t *testing.T) {
 	if got := eval(t, ctx, caches); !strings.HasPrefix(got, "2 ") {
 		t.Errorf("while the new build waits: got caches %s, want 2", got)
 	}
+	reload(t, ctx)
+	eval(t, ctx, untilRunning)
+	if title := eval(t, ctx, "document.title"); title != "One" {
+		t.Errorf("loaded again before the word is given: got page %q, want One", title)
+	}
+	eval(t, ctx, untilOffer)
 	// The page loads itself again.
 	change := chromedp.Evaluate[any](`window.hillwrightUpdate(), 0`)
 	loaded := func(page.EventLoadEventFired) bool { return true }

@@ -8,6 +8,7 @@ import (
 	"io"
 	"io/fs"
 	"os"
+	"path/filepath"
 
 	"hillwright/build"
 	"hillwright/build/shop"
@@ -38,6 +39,10 @@ func packPage(ctx context.Context, args []string, out io.Writer) error {
 		return err
 	}
 	parts := build.Parts{Site: site.Files(), Shop: own, Program: program, Budget: build.DefaultBudget()}
+	// Where a person has no folder for caches, packing takes longer, no more.
+	if cache, err := os.UserCacheDir(); err == nil {
+		parts.Cache = filepath.Join(cache, "hillwright")
+	}
 	report, err := build.Pack(parts, *outDir)
 	if report != nil {
 		err = errors.Join(report.Write(out), err)

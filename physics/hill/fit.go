@@ -45,32 +45,7 @@ func fitHeights(data []datum, nodes int, spacingM float64, kind heightKind, smoo
 		s.forgiveBends(spacingM)
 	}
 	s.solve(stiff(smoothM))
-	s.straightenHoles()
 	return s.z
-}
-
-// straightenHoles lays the curve straight across nodes without a measured
-// height: nothing is known there, and a curve would swing.
-func (s *smoother) straightenHoles() {
-	from := -1 // the last node with a measured height
-	for i := range s.data {
-		o := &s.data[i]
-		if o.filled {
-			continue
-		}
-		to := int(float64(o.node) + o.part + 0.5)
-		for k := from + 1; k < to; k++ {
-			s.z[k] = s.z[to]
-			if from >= 0 {
-				part := float64(k-from) / float64(to-from)
-				s.z[k] = s.z[from] + part*(s.z[to]-s.z[from])
-			}
-		}
-		from = to
-	}
-	for k := from + 1; from >= 0 && k < len(s.z); k++ {
-		s.z[k] = s.z[from]
-	}
 }
 
 // choose gives the length scale with the least cross-validation score.

@@ -74,8 +74,8 @@ func cut(totalM, wantedM, usualM float64) (pieces int, spacingM float64) {
 
 // data gives one height for each stretch around a node that has points: their
 // mean, at their mean place. So a place counts the same however densely it was
-// recorded. Nodes in a hole between heights get one straight across, of little
-// weight, so that the curve does not swing there.
+// recorded. Nodes in a hole between heights get one straight across, of half
+// the weight, so that the curve does not swing there.
 func (w *way) data(pieces int, spacingM float64) []datum {
 	var out []datum
 	place := func(atM, height float64, filled bool) datum {
@@ -148,8 +148,8 @@ func (w *way) bearings(pieces int, spacingM float64) []float64 {
 	from := at(0)
 	for k := range out {
 		to := at(float64(k+1) * spacingM)
-		if d, bearing, _ := leg(&from, &to); d > 0.01 {
-			out[k] = bearing
+		if leg(&from, &to) > 0.01 {
+			out[k] = bearing(&from, &to)
 		} else if k > 0 {
 			out[k] = out[k-1]
 		}

@@ -109,7 +109,7 @@ func (g *gather) track(l line) Track {
 func (t *Track) RawLengthM() float64 {
 	sum := 0.0
 	t.eachLeg(func(a, b *Point) {
-		d, _, _ := leg(a, b)
+		d := leg(a, b)
 		sum += d
 	})
 	return sum

@@ -2,6 +2,7 @@ package hill
 
 import (
 	"math"
+	"slices"
 	"sort"
 )
 
@@ -84,6 +85,9 @@ func (w *way) dropHeightSpikes() {
 		from := max(0, min(k-3, len(at)-7))
 		for j := range window {
 			window[j] = w.points[at[from+j]].HeightM
+		}
+		if slices.Max(window[:])-slices.Min(window[:]) <= heightJumpM {
+			continue
 		}
 		d := math.Abs(w.points[at[k]].HeightM - medianOf(window[:]))
 		reach := w.atM[at[from+6]] - w.atM[at[from]]

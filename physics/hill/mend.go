@@ -58,7 +58,7 @@ func mend(t *Track) way {
 		if old == 0 || len(w.points) == old {
 			continue
 		}
-		hole, _, _ := leg(&w.points[old-1], &w.points[old])
+		hole := leg(&w.points[old-1], &w.points[old])
 		w.note(NoteSegments, w.atM[old-1], hole)
 		shift = w.step(old)
 		for i := old; i < len(w.points); i++ {
@@ -99,7 +99,7 @@ func (w *way) segment(points []Point, usual float64) {
 		}
 		d := 0.0
 		if last != nil {
-			d, _, _ = leg(last, &p)
+			d = leg(last, &p)
 			if d == 0 {
 				w.note(NoteDuplicate, at, 0)
 				if math.IsNaN(last.HeightM) {
@@ -139,8 +139,8 @@ func (w *way) offTheWay(last *Point, ahead []Point, d, usual float64) int {
 		return 0
 	}
 	for n := 1; n <= jumpPoints && n < len(ahead); n++ {
-		back, _, _ := leg(&ahead[n-1], &ahead[n])
-		rest, _, _ := leg(last, &ahead[n])
+		back := leg(&ahead[n-1], &ahead[n])
+		rest := leg(last, &ahead[n])
 		if jump(&ahead[n-1], &ahead[n], back, usual) && rest < 0.5*min(d, back) {
 			return n
 		}
@@ -166,7 +166,10 @@ func standing(points []Point) int {
 	n := 0
 	for n+1 < len(points) {
 		p := &points[n+1]
-		d, _, _ := leg(&points[0], p)
+		if math.Abs(p.LatDeg-points[0].LatDeg) > 1e-4 { // 11 m: no need to know it better
+			break
+		}
+		d := leg(&points[0], p)
 		if !(d <= standM) || !(p.TimeS >= t0) {
 			break
 		}
@@ -184,7 +187,7 @@ func usualLegM(t *Track) float64 {
 	every := 1 + len(t.Points)/5000
 	var legs []float64
 	for i := every; i < len(t.Points); i += every {
-		if d, _, _ := leg(&t.Points[i-1], &t.Points[i]); d > 0 {
+		if d := leg(&t.Points[i-1], &t.Points[i]); d > 0 {
 			legs = append(legs, d)
 		}
 	}

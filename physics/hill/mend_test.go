@@ -158,6 +158,53 @@ func TestHoleBetweenSegmentsLeavesNoWall(t *testing.T) {
 	}
 }
 
+// The recorder's height drifts up by 30 m while the rider stands for three
+// minutes: no wall, and the climb behind it is as high as it is.
+func TestDriftWhileStandingLeavesNoWall(t *testing.T) {
+	tr := climb(201, 10, 2, 0.06)
+	for i := 100; i < len(tr.Points); i++ {
+		tr.Points[i].HeightM += 30
+		tr.Points[i].TimeS += 180
+	}
+	p := mustProfile(t, &tr)
+	if math.Abs(p.AscentM()-119.4) > 0.5 || noteOf(&p, NoteSpike).Count != 1 {
+		t.Errorf("ascent %.2f m, want 119.4; notes %v", p.AscentM(), p.Notes)
+	}
+}
+
+// Every 25th height is 4 m off: such heights weigh nothing.
+func TestOutlyingHeightsWeighNothing(t *testing.T) {
+	tr := climb(201, 10, 2, 0.06)
+	for i := 10; i < len(tr.Points); i += 25 {
+		tr.Points[i].HeightM += 4
+	}
+	p := mustProfile(t, &tr)
+	for i, g := range p.Grade {
+		if math.Abs(float64(g)-0.06) > 0.002 {
+			t.Errorf("piece %d has grade %.4f, want 0.06", i, g)
+		}
+	}
+}
+
+// Over the crest of a hill 500 m have no heights: the curve may not swing up
+// there, where nothing is known, but goes straight across.
+func TestCurveGoesStraightOverAHole(t *testing.T) {
+	tr := climb(201, 10, 2, 0.10)
+	for i := range tr.Points {
+		x := float64(i) * 10
+		tr.Points[i].HeightM = 400.25 + 0.10*math.Min(x, 2000-x)
+		if x > 750 && x < 1250 {
+			tr.Points[i].HeightM = math.NaN()
+		}
+	}
+	p := mustProfile(t, &tr)
+	for s := 800.0; s < 1200; s += 10 {
+		if g := float64(p.GradeAt(s)); math.Abs(g) > 0.002 {
+			t.Errorf("at %g m the grade is %.4f, want 0", s, g)
+		}
+	}
+}
+
 func TestTooShortAndBadOptions(t *testing.T) {
 	still := climb(50, 0.01, 1, 0)
 	long := climb(201, 10, 2, 0.06)
@@ -198,6 +245,20 @@ func TestOptions(t *testing.T) {
 	}
 }
 
+// The stiffest curve that options allow is still solved well.
+func TestStiffestCurveKeepsAnEvenClimb(t *testing.T) {
+	tr := climb(1001, 10, 2, 0.06)
+	p, err := FromTrack(&tr, Options{SmoothM: 500, PieceM: 1})
+	if err != nil {
+		t.Fatal(err)
+	}
+	for i, g := range p.Grade {
+		if math.Abs(float64(g)-0.06) > 1e-3 {
+			t.Fatalf("piece %d has grade %.6f, want 0.06", i, g)
+		}
+	}
+}
+
 // A straight even road keeps its length and ascent whatever the spacing of its
 // points, its place and its direction; every profile is sound and the bearing
 // is that of the way.
@@ -208,17 +269,17 @@ func TestStraightRoadHoldsWhateverTheSampling(t *testing.T) {
 			lat = -lat
 		}
 		lon := rapid.Float64Range(-180, 180).Draw(t, "longitude")
-		bearing := rapid.Float64Range(0, 2*math.Pi).Draw(t, "bearing")
+		course := rapid.Float64Range(0, 2*math.Pi).Draw(t, "course")
 		grade := rapid.Float64Range(-0.25, 0.25).Draw(t, "grade")
 		x := 0.0
 		var tr Track
 		tr.SegmentStart = []int{0}
 		for x < 1500 {
 			// On a sphere of the local radius, good to a few parts in 1000 here.
-			p := Point{LatDeg: lat + x*math.Cos(bearing)/111_200, TimeS: x / 4}
-			p.LonDeg = math.Mod(lon+x*math.Sin(bearing)/111_320/math.Cos(p.LatDeg*math.Pi/180)+540, 360) - 180
+			p := Point{LatDeg: lat + x*math.Cos(course)/111_200, TimeS: x / 4}
+			p.LonDeg = math.Mod(lon+x*math.Sin(course)/111_320/math.Cos(p.LatDeg*math.Pi/180)+540, 360) - 180
 			if n := len(tr.Points); n > 0 {
-				d, _, _ := leg(&tr.Points[n-1], &p)
+				d := leg(&tr.Points[n-1], &p)
 				p.HeightM = tr.Points[n-1].HeightM + grade*d
 			} else {
 				p.HeightM = 100.37
@@ -227,7 +288,7 @@ func TestStraightRoadHoldsWhateverTheSampling(t *testing.T) {
 			x += rapid.Float64Range(2, 30).Draw(t, "step")
 		}
 		n := len(tr.Points)
-		direct, toEnd, _ := leg(&tr.Points[0], &tr.Points[n-1])
+		direct, toEnd := leg(&tr.Points[0], &tr.Points[n-1]), bearing(&tr.Points[0], &tr.Points[n-1])
 		p, err := FromTrack(&tr, Options{})
 		if err != nil {
 			t.Fatal(err)

@@ -102,12 +102,20 @@ func newScanner(r io.Reader) *scanner {
 
 // next gives one byte; ok is false at the end of the file and on an error.
 func (s *scanner) next() (c byte, ok bool) {
-	if s.pos == s.end && !s.refill() {
+	if s.pos < s.end {
+		s.pos++
+		return s.buf[s.pos-1], true
+	}
+	return s.nextOfFile()
+}
+
+// nextOfFile is next at the end of the buffer: apart, so that next is inlined.
+func (s *scanner) nextOfFile() (c byte, ok bool) {
+	if !s.refill() {
 		return 0, false
 	}
-	c = s.buf[s.pos]
-	s.pos++
-	return c, true
+	s.pos = 1
+	return s.buf[0], true
 }
 
 // back gives the last byte back, once.

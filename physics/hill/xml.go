@@ -260,24 +260,43 @@ func (x *xmlScanner) attribute() (c byte, ok bool, err *TrackError) {
 func (x *xmlScanner) nameInto(dst *[]byte) (c byte, ok bool, err *TrackError) {
 	from := len(*dst)
 	for {
-		c, ok = x.next()
-		if !ok {
-			return 0, false, x.ended()
+		buf := x.buf[x.pos:x.end]
+		n := 0
+		for n < len(buf) && nameBytes[buf[n]] {
+			n++
 		}
-		letter := c|0x20 >= 'a' && c|0x20 <= 'z' || c >= 0x80 || c == '_' || c == ':'
-		if !letter && (len(*dst) == from || !isDigit(c) && c != '-' && c != '.') {
-			break
+		if n > 0 && len(*dst) == from && (isDigit(buf[0]) || buf[0] == '-' || buf[0] == '.') {
+			return 0, false, x.broken("expected a name, got " + strconv.QuoteRune(rune(buf[0])))
 		}
-		if len(*dst)-from > 256 {
+		if len(*dst)-from+n > longestName {
 			return 0, false, x.broken("name too long")
 		}
-		*dst = append(*dst, c)
+		*dst = append(*dst, buf[:n]...)
+		x.pos += n
+		if c, ok = x.next(); !ok {
+			return 0, false, x.ended()
+		}
+		if !nameBytes[c] {
+			break
+		}
+		x.back() // the name goes on in the next buffer
 	}
 	if len(*dst) == from {
 		return 0, false, x.broken("expected a name, got " + strconv.QuoteRune(rune(c)))
 	}
 	return c, true, nil
 }
+
+const longestName = 256 // bytes
+
+// nameBytes tells which bytes a name may have; digits, - and . not in front.
+var nameBytes = func() (t [256]bool) {
+	for c := range t {
+		letter := c|0x20 >= 'a' && c|0x20 <= 'z' || c >= 0x80
+		t[c] = letter || isDigit(byte(c)) || c == '_' || c == ':' || c == '-' || c == '.'
+	}
+	return t
+}()
 
 func (x *xmlScanner) endTag() (xmlToken, *TrackError) {
 	x.text = x.text[:0]

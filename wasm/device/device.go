@@ -5,7 +5,6 @@ package device
 import (
 	"strings"
 	"syscall/js"
-	"time"
 )
 
 // Device is the browser the page runs in.
@@ -20,7 +19,22 @@ type Device struct {
 func New() *Device { return &Device{database: js.Undefined()} }
 
 // Now is the time in seconds since 1970.
-func (d *Device) Now() int64 { return time.Now().Unix() }
+func (d *Device) Now() int64 { return int64(js.Global().Get("Date").Call("now").Float() / 1000) }
+
+// nowMs is a clock for spans [ms].
+func nowMs() float64 { return js.Global().Get("performance").Call("now").Float() }
+
+// After calls f after a time [ms]. The package time would do, and makes the
+// program larger by a thirtieth.
+func After(ms float64, f func()) {
+	var then js.Func
+	then = js.FuncOf(func(js.Value, []js.Value) any {
+		then.Release()
+		f()
+		return nil
+	})
+	js.Global().Call("setTimeout", then, ms)
+}
 
 func window() js.Value   { return js.Global() }
 func document() js.Value { return js.Global().Get("document") }

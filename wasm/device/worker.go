@@ -4,7 +4,6 @@ package device
 
 import (
 	"syscall/js"
-	"time"
 
 	"hillwright/physics/hill"
 )
@@ -86,19 +85,19 @@ func (w *worker) take(message js.Value) {
 	w.done(trackOf(message))
 }
 
-// sliceFor is how long a slice of a reading in the page itself may take.
-const sliceFor = 12 * time.Millisecond
+// sliceFor is how long a slice of a reading in the page itself may take [ms].
+const sliceFor = 12
 
 // readHere reads a track in the page itself, giving way to it between slices.
 func (d *Device) readHere(data []byte, part func(float64), done func(Track)) {
 	mine := d.stopped
 	go func() {
-		began := time.Now()
+		began := nowMs()
 		t := readTrack(data, func(read float64) bool {
-			if time.Since(began) > sliceFor {
+			if nowMs()-began > sliceFor {
 				part(read)
-				time.Sleep(time.Millisecond)
-				began = time.Now()
+				giveWay()
+				began = nowMs()
 			}
 			return mine == d.stopped
 		})
@@ -106,4 +105,11 @@ func (d *Device) readHere(data []byte, part func(float64), done func(Track)) {
 			done(t)
 		}
 	}()
+}
+
+// giveWay lets the page go on for a moment; only for goroutines of their own.
+func giveWay() {
+	on := make(chan struct{})
+	After(0, func() { close(on) })
+	<-on
 }

@@ -1,17 +1,29 @@
 package dom
 
 // Part is what an element is made of: an Attr, a *Node, a Text, or Parts.
+//
+// The makers of parts are not inlined: views call them by the thousand, and
+// each call in line made the page's program larger.
 type Part interface{ addTo(*Node) }
 
 // El makes an element of its parts, in order.
+//
+//go:noinline
 func El(tag string, parts ...Part) *Node {
 	n := &Node{Tag: tag}
+	n.Add(parts...)
+	return n
+}
+
+// Add gives an element more parts.
+//
+//go:noinline
+func (k *Node) Add(parts ...Part) {
 	for _, p := range parts {
 		if p != nil {
-			p.addTo(n)
+			p.addTo(k)
 		}
 	}
-	return n
 }
 
 // SVGNamespace is the XML namespace of SVG.
@@ -19,7 +31,9 @@ const SVGNamespace = "http://www.w3.org/2000/svg"
 
 // SVG makes the outermost element of a picture, with its namespace.
 func SVG(parts ...Part) *Node {
-	return El("svg", Attr{"xmlns", SVGNamespace}, Parts(parts))
+	n := El("svg", With("xmlns", SVGNamespace))
+	n.Add(parts...)
+	return n
 }
 
 // Text is words inside an element.
@@ -30,13 +44,7 @@ func (t Text) addTo(n *Node) { n.Kids = append(n.Kids, &Node{Text: string(t)}) }
 // Parts is several parts as one.
 type Parts []Part
 
-func (ps Parts) addTo(n *Node) {
-	for _, p := range ps {
-		if p != nil {
-			p.addTo(n)
-		}
-	}
-}
+func (ps Parts) addTo(n *Node) { n.Add(ps...) }
 
 // addTo hangs a node under n. A nil node adds nothing, so that a view may
 // leave a piece out by returning nil.
@@ -49,23 +57,35 @@ func (k *Node) addTo(n *Node) {
 func (a Attr) addTo(n *Node) { n.Attrs = append(n.Attrs, a) }
 
 // With is an attribute with a value.
-func With(name, value string) Attr { return Attr{name, value} }
+//
+//go:noinline
+func With(name, value string) Part { return &Attr{name, value} }
 
 // Bare is an attribute without a value, such as hidden.
-func Bare(name string) Attr { return Attr{Name: name} }
+//
+//go:noinline
+func Bare(name string) Part { return &Attr{Name: name} }
 
 // Class gives an element its classes, with blanks between them.
-func Class(names string) Attr { return Attr{"class", names} }
+//
+//go:noinline
+func Class(names string) Part { return &Attr{"class", names} }
 
 // ID names an element.
-func ID(name string) Attr { return Attr{"id", name} }
+//
+//go:noinline
+func ID(name string) Part { return &Attr{"id", name} }
 
 // Act says which action a touch on the element asks for, and its argument.
-func Act(name, arg string) Parts {
+//
+//go:noinline
+func Act(name, arg string) Part {
 	return Parts{Attr{"data-act", name}, Attr{"data-arg", arg}}
 }
 
 // If gives the part when the condition holds, else nothing.
+//
+//go:noinline
 func If(yes bool, p Part) Part {
 	if yes {
 		return p

@@ -6,17 +6,38 @@ import (
 	"strings"
 )
 
-// void are the elements of HTML that have no end tag and nothing inside.
-var void = map[string]bool{
-	"area": true, "base": true, "br": true, "col": true, "embed": true, "hr": true, "img": true,
-	"input": true, "link": true, "meta": true, "source": true, "track": true, "wbr": true,
+// isVoid tells whether HTML writes the element without an end tag, and lets
+// nothing stand inside it.
+func isVoid(tag string) bool {
+	switch tag {
+	case "area", "base", "br", "col", "embed", "hr", "img", "input", "link", "meta", "source", "track", "wbr":
+		return true
+	}
+	return false
 }
 
-// IsVoid tells whether HTML writes the element without an end tag.
-func IsVoid(tag string) bool { return void[tag] }
-
-var escapeText = strings.NewReplacer("&", "&amp;", "<", "&lt;", ">", "&gt;")
-var escapeValue = strings.NewReplacer("&", "&amp;", "<", "&lt;", ">", "&gt;", `"`, "&quot;")
+// escape writes what would end a text or an attribute as entities.
+func escape(s string) string {
+	if !strings.ContainsAny(s, `&<>"`) {
+		return s
+	}
+	var b strings.Builder
+	for i := 0; i < len(s); i++ {
+		switch s[i] {
+		case '&':
+			b.WriteString("&amp;")
+		case '<':
+			b.WriteString("&lt;")
+		case '>':
+			b.WriteString("&gt;")
+		case '"':
+			b.WriteString("&quot;")
+		default:
+			b.WriteByte(s[i])
+		}
+	}
+	return b.String()
+}
 
 // WriteHTML writes the tree as HTML, SVG inside it included. It fails on what
 // HTML cannot say: a name with odd signs, the same attribute twice, something
@@ -60,7 +81,7 @@ func (w *writer) fail(n *Node, what string) {
 
 func (w *writer) node(n *Node) {
 	if n.Tag == "" {
-		w.put(escapeText.Replace(n.Text))
+		w.put(escape(n.Text))
 		return
 	}
 	if !goodName(n.Tag) {
@@ -79,7 +100,7 @@ func (w *writer) node(n *Node) {
 		}
 	}
 	w.put(">")
-	if void[n.Tag] {
+	if isVoid(n.Tag) {
 		if len(n.Kids) > 0 {
 			w.fail(n, "nothing can stand inside it")
 		}
@@ -97,7 +118,7 @@ func (w *writer) attr(n *Node, a Attr) {
 	}
 	w.put(" ", a.Name)
 	if a.Value != "" {
-		w.put(`="`, escapeValue.Replace(a.Value), `"`)
+		w.put(`="`, escape(a.Value), `"`)
 	}
 }
 

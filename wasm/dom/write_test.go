@@ -13,7 +13,7 @@ func TestWriteHTML(t *testing.T) {
 		node *Node
 		want string // starts with "!" when it must fail with these words
 	}{
-		{"text", &Node{Text: `a < b & "c" > d`}, `a &lt; b &amp; "c" &gt; d`},
+		{"text", &Node{Text: `a < b & "c" > d`}, `a &lt; b &amp; &quot;c&quot; &gt; d`},
 		{"element", El("p", Class("why"), Text("so")), `<p class="why">so</p>`},
 		{"empty element keeps its end", El("p"), `<p></p>`},
 		{"void", El("input", With("value", `"<&>`), Bare("disabled")), `<input value="&quot;&lt;&amp;&gt;" disabled>`},

@@ -4,8 +4,8 @@ package page
 
 import (
 	"syscall/js"
-	"time"
 
+	"hillwright/wasm/device"
 	"hillwright/wasm/state"
 )
 
@@ -30,6 +30,11 @@ func (p *page) listen() {
 		{"drop", h.drop},
 	} {
 		js.Global().Get("document").Call("addEventListener", each.event, js.FuncOf(func(_ js.Value, args []js.Value) any {
+			defer func() {
+				if failed := recover(); failed != nil {
+					p.broke(report(each.event, failed))
+				}
+			}()
 			each.take(args[0])
 			return nil
 		}))
@@ -121,10 +126,10 @@ func (h *hand) key(e js.Value) {
 	}
 }
 
-// Holding a stepper's button steps on by itself.
+// Holding a stepper's button steps on by itself [ms].
 const (
-	holdFor   = 450 * time.Millisecond
-	stepEvery = 90 * time.Millisecond
+	holdFor   = 450
+	stepEvery = 90
 )
 
 func (h *hand) down(e js.Value) {
@@ -137,17 +142,18 @@ func (h *hand) down(e js.Value) {
 		h.move(e)
 	case act == state.StepUp || act == state.StepDown || act == state.StaffStep:
 		h.repeats++
-		go h.repeat(h.repeats, state.Action{Name: act, Arg: arg})
+		press := h.repeats
+		device.After(holdFor, func() { h.repeat(press, state.Action{Name: act, Arg: arg}) })
 	}
 }
 
 func (h *hand) repeat(press int, a state.Action) {
-	time.Sleep(holdFor)
-	for press == h.repeats {
-		h.repeated = true
-		h.do(a)
-		time.Sleep(stepEvery)
+	if press != h.repeats {
+		return
 	}
+	h.repeated = true
+	h.do(a)
+	device.After(stepEvery, func() { h.repeat(press, a) })
 }
 
 func (h *hand) move(e js.Value) {

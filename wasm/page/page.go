@@ -3,7 +3,7 @@
 package page
 
 import (
-	"runtime/debug"
+	"runtime"
 	"syscall/js"
 
 	"github.com/hexops/vecty"
@@ -106,7 +106,9 @@ func report(doing string, failed any) string {
 	case string:
 		what = f
 	}
-	return doing + ": " + what + "\n" + string(debug.Stack())
+	stack := make([]byte, 4096)
+	stack = stack[:runtime.Stack(stack, false)]
+	return doing + ": " + what + "\n" + string(stack)
 }
 
 // broke shows the panel that tells what happened. When even that fails the

@@ -99,6 +99,11 @@ func (s *State) choose(kind keep.Kind, id string) {
 		s.undoable(s.clone())
 		s.say(Message{Key: words.ChangesGone, Args: []string{s.NameOf(kind)}, Undo: true})
 	}
+	s.take(kind, id)
+}
+
+// take puts a thing's inputs into the question.
+func (s *State) take(kind keep.Kind, id string) {
 	s.Chosen[kind] = id
 	s.rebase()
 	for _, in := range Inputs(kind) {

@@ -34,17 +34,7 @@ type Effect struct {
 func storage(prev, next *State) []Effect {
 	var out []Effect
 	if prev.ownRevision != next.ownRevision {
-		was, is := records(prev.Own), records(next.Own)
-		for key, data := range is {
-			if was[key] != data {
-				out = append(out, Effect{Kind: StoreThing, Key: key, Data: []byte(data)})
-			}
-		}
-		for key := range was {
-			if _, stays := is[key]; !stays {
-				out = append(out, Effect{Kind: DropThing, Key: key})
-			}
-		}
+		out = changedRecords(prev.Own, next.Own)
 	}
 	if is := keep.EncodeSettings(next.settings()); string(is) != string(keep.EncodeSettings(prev.settings())) {
 		out = append(out, Effect{Kind: StoreSettings, Data: is})
@@ -52,14 +42,44 @@ func storage(prev, next *State) []Effect {
 	return out
 }
 
-// records gives each thing as a file of its own, by its key in the database.
-func records(own keep.Things) map[string]string {
-	out := map[string]string{}
-	for _, t := range own.Things {
-		out[string(t.Kind)+":"+t.ID] = string(keep.Encode(keep.Things{Things: []keep.Thing{t}}))
+// changedRecords gives what must be written so that the device has next: a file
+// of its own for each thing that is new or not the same any more. Long hills
+// are many numbers, so that one is written only when it must be.
+func changedRecords(prev, next keep.Things) []Effect {
+	var out []Effect
+	for i := range next.Things {
+		t := &next.Things[i]
+		if at := prev.At(t.Kind, t.ID); at < 0 || !sameRecord(keep.Things{Things: prev.Things[at : at+1]}, keep.Things{Things: next.Things[i : i+1]}) {
+			out = append(out, put(string(t.Kind)+":"+t.ID, keep.Things{Things: next.Things[i : i+1]}))
+		}
 	}
-	for _, h := range own.Hills {
-		out[string(Hill)+":"+h.ID] = string(keep.Encode(keep.Things{Hills: []keep.Hill{h}}))
+	for i := range next.Hills {
+		h := &next.Hills[i]
+		if at := prev.HillAt(h.ID); at < 0 || !sameHill(&prev.Hills[at], h) {
+			out = append(out, put(string(Hill)+":"+h.ID, keep.Things{Hills: next.Hills[i : i+1]}))
+		}
+	}
+	for _, t := range prev.Things {
+		if next.At(t.Kind, t.ID) < 0 {
+			out = append(out, Effect{Kind: DropThing, Key: string(t.Kind) + ":" + t.ID})
+		}
+	}
+	for _, h := range prev.Hills {
+		if next.HillAt(h.ID) < 0 {
+			out = append(out, Effect{Kind: DropThing, Key: string(Hill) + ":" + h.ID})
+		}
 	}
 	return out
+}
+
+func put(key string, one keep.Things) Effect {
+	return Effect{Kind: StoreThing, Key: key, Data: keep.Encode(one)}
+}
+
+func sameRecord(a, b keep.Things) bool { return string(keep.Encode(a)) == string(keep.Encode(b)) }
+
+// sameHill tells that a hill was not written to: lists are replaced when they
+// change, so that the same first edge means the same list.
+func sameHill(a, b *keep.Hill) bool {
+	return a.Changed == b.Changed && a.Names[""] == b.Names[""] && &a.EdgeM[0] == &b.EdgeM[0]
 }

@@ -38,6 +38,7 @@ func (s *State) doHill(a Action) (bool, []Effect) {
 		return true, []Effect{{Kind: Show, Key: "place"}}
 	case TrackRead:
 		s.trackRead(a)
+		return true, []Effect{{Kind: Show, Key: "blank-" + string(Hill)}}
 	default:
 		return false, nil
 	}

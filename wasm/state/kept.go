@@ -16,6 +16,7 @@ func (s *State) doKept(a Action) (bool, []Effect) {
 		s.Name = a.Text
 	case Keep:
 		s.keep(keep.Kind(a.Arg), a.Now)
+		return true, []Effect{{Kind: Show, Key: "blank-" + a.Arg}}
 	case Forget:
 		kind, id := cut(a.Arg, ":")
 		s.forget(keep.Kind(kind), id)
@@ -166,7 +167,8 @@ func (s *State) putHill(h keep.Hill, now int64) {
 }
 
 // forget takes one of the person's own things away; when it was chosen, the
-// first of its kind that is left is chosen.
+// first of its kind that is left is chosen. Without any the inputs stay as they
+// are.
 func (s *State) forget(kind keep.Kind, id string) {
 	if !s.IsOwn(kind, id) {
 		return
@@ -198,11 +200,12 @@ func (s *State) chooseFirst(kind keep.Kind) {
 		s.chooseHill(id)
 		return
 	}
+	if all := s.Things(kind); len(all) > 0 {
+		s.take(kind, all[0].ID)
+		return
+	}
 	delete(s.Chosen, kind)
 	s.rebase()
-	if all := s.Things(kind); len(all) > 0 {
-		s.choose(kind, all[0].ID)
-	}
 }
 
 func without[T any](list []T, at int) []T {

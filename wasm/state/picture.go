@@ -10,24 +10,32 @@ import (
 
 var nowhere = math.NaN()
 
-// Sizes of the pictures. Heights follow from the width alone, so that nothing
-// jumps when the true width becomes known.
+// Sizes of the pictures: on a phone their height follows from their width, on
+// anything wider it is fixed. The stylesheet says the same, so that nothing
+// jumps when the true width becomes known after the first paint.
 const (
+	widePx      = 420
 	sectionTall = 0.62
+	sectionPx   = 270
 	balanceTall = 0.60
+	balancePx   = 230
 	pullTall    = 0.75
+	pullPx      = 340
 )
 
 // SectionSize is the size in which the section is drawn.
-func (s *State) SectionSize() draw.Size { return s.size(sectionTall) }
+func (s *State) SectionSize() draw.Size { return s.size(sectionTall, sectionPx) }
 
 // BalanceSize is the size in which the balance is drawn.
-func (s *State) BalanceSize() draw.Size { return s.size(balanceTall) }
+func (s *State) BalanceSize() draw.Size { return s.size(balanceTall, balancePx) }
 
 // PullSize is the size in which the pull diagram is drawn.
-func (s *State) PullSize() draw.Size { return s.size(pullTall) }
+func (s *State) PullSize() draw.Size { return s.size(pullTall, pullPx) }
 
-func (s *State) size(tall float64) draw.Size {
+func (s *State) size(tall, px float64) draw.Size {
+	if s.Device.WidthPx >= widePx {
+		return draw.Size{W: s.Device.WidthPx, H: px}
+	}
 	return draw.Size{W: s.Device.WidthPx, H: math.Round(s.Device.WidthPx * tall)}
 }
 

@@ -4,6 +4,7 @@ import (
 	"strings"
 
 	"hillwright/wasm/keep"
+	"hillwright/wasm/words"
 )
 
 // Reduce gives the state after an action, and what the device is to do. prev
@@ -55,6 +56,9 @@ func (s *State) doRest(a Action) []Effect {
 		return []Effect{{Kind: Show, Key: "place"}}
 	case Close:
 		from := s.Place
+		if s.Path != "" && !s.All {
+			from = s.Path
+		}
 		s.leave()
 		s.Place, s.Path, s.Faults = "", "", nil
 		return []Effect{{Kind: Show, Key: "blank-" + from}}
@@ -88,7 +92,7 @@ func (s *State) doRest(a Action) []Effect {
 	case Undo:
 		s.undo()
 	case Stored:
-		s.Device.Storage = a.Arg
+		s.stored(a.Arg)
 	case Waiting:
 		s.Device.Waiting = true
 	case CanShare:
@@ -103,6 +107,21 @@ func (s *State) doRest(a Action) []Effect {
 		s.Broken = ""
 	}
 	return nil
+}
+
+// stored takes how the device keeps things; what a person must know of it is
+// said once.
+func (s *State) stored(how string) {
+	if how == s.Device.Storage {
+		return
+	}
+	s.Device.Storage = how
+	switch how {
+	case "refused":
+		s.say(Message{Key: words.StorageRefused})
+	case "full":
+		s.say(Message{Key: words.StorageFull})
+	}
 }
 
 // dress takes over what the person likes.

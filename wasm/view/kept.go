@@ -88,20 +88,19 @@ func (v *viewer) settings() Part {
 		name := words.Voice{Lang: l}.Say(words.LanguageSelf)
 		languages = append(languages, v.one(state.SetLanguage, l.Tag(), Parts{With("lang", l.Tag()), Text(name)}, v.Lang == l))
 	}
-	say := func(k words.Key) Part { return v.say(k) }
 	imperial := v.Units == words.Imperial
 	return Parts{
 		If(len(languages) > 1, v.oneOf(words.SetLanguage, languages)),
 		v.oneOf(words.SetUnits, Parts{
-			v.one(state.SetUnits, "metric", say(words.SetMetric), !imperial),
-			v.one(state.SetUnits, "imperial", say(words.SetImperial), imperial)}),
+			v.one(state.SetUnits, "metric", v.say(words.SetMetric), !imperial),
+			v.one(state.SetUnits, "imperial", v.say(words.SetImperial), imperial)}),
 		v.oneOf(words.SetMark, Parts{
-			v.one(state.SetMark, "point", say(words.SetPoint), !v.Comma),
-			v.one(state.SetMark, "comma", say(words.SetComma), v.Comma)}),
+			v.one(state.SetMark, "point", v.say(words.SetPoint), !v.Comma),
+			v.one(state.SetMark, "comma", v.say(words.SetComma), v.Comma)}),
 		v.oneOf(words.SetTheme, Parts{
-			v.one(state.SetTheme, "device", say(words.SetThemeDevice), v.Theme == ""),
-			v.one(state.SetTheme, "sun", say(words.SetThemeSun), v.Theme == "sun"),
-			v.one(state.SetTheme, "dusk", say(words.SetThemeDusk), v.Theme == "dusk")}),
+			v.one(state.SetTheme, "device", v.say(words.SetThemeDevice), v.Theme == ""),
+			v.one(state.SetTheme, "sun", v.say(words.SetThemeSun), v.Theme == "sun"),
+			v.one(state.SetTheme, "dusk", v.say(words.SetThemeDusk), v.Theme == "dusk")}),
 		v.law(),
 	}
 }

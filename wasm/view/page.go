@@ -27,8 +27,8 @@ func Page(s *state.State) *Node {
 		v.masthead(),
 		El("main",
 			El("div", Class("asks"), v.sentence(), v.place(), v.answer()),
-			El("div", Class("pictures"), v.section(), v.balance()),
-			El("div", Class("notes"), v.figures(), v.pull(), v.cautions()),
+			El("div", Class("pictures"), v.section(), v.balance(), v.pull()),
+			El("div", Class("notes"), v.figures(), v.cautions()),
 		),
 		v.dropping(),
 		v.message(),
@@ -42,11 +42,13 @@ type viewer struct {
 	words.Voice
 }
 
-func (v *viewer) say(k words.Key, args ...string) Text { return Text(v.Voice.Say(k, args...)) }
+func (v *viewer) say(k words.Key, args ...string) Part { return Text(v.Voice.Say(k, args...)) }
 
 // region is a part of the page that is rendered anew by itself.
 func region(tag, name string, parts ...Part) *Node {
-	return El(tag, ID(name), With("data-region", name), Parts(parts))
+	n := El(tag, ID(name), With("data-region", name))
+	n.Add(parts...)
+	return n
 }
 
 // heading is a part's heading, for ears only where the look needs none.
@@ -56,10 +58,12 @@ func (v *viewer) heading(k words.Key, class string) *Node {
 
 // button is a thing to touch that is not a blank of the sentence.
 func button(class, act, arg string, parts ...Part) *Node {
-	return El("button", With("type", "button"), Class(class), Act(act, arg), Parts(parts))
+	n := El("button", With("type", "button"), Class(class), Act(act, arg))
+	n.Add(parts...)
+	return n
 }
 
-func flag(name string, yes bool) Attr {
+func flag(name string, yes bool) Part {
 	if yes {
 		return With(name, "true")
 	}
@@ -79,7 +83,7 @@ func (v *viewer) masthead() *Node {
 	}
 	return region("header", "masthead", Class("masthead"),
 		El("h1", Text(v.Shop.Name)),
-		El("div", Class("openers"), opener(state.PlaceKept, words.HeadKept), opener(state.PlaceSettings, words.HeadSettings)),
+		El("div", Class("openers"), opener(state.PlaceKept, words.OpenKept), opener(state.PlaceSettings, words.HeadSettings)),
 		If(v.Device.Waiting, El("p", Class("waiting"), With("role", "status"),
 			v.say(words.NewVersion), Text(" "), button("plain", state.UseNew, "", v.say(words.ButtonUseNew)))),
 	)

@@ -31,7 +31,7 @@ func (v *viewer) section() *Node {
 			button("step small", state.StaffStep, "-", With("aria-label", v.Voice.Say(words.StaffBack)), Text("‹")),
 			v.swatches(),
 			button("step small", state.StaffStep, "+", With("aria-label", v.Voice.Say(words.StaffOn)), Text("›"))),
-		v.table("section-table", func() *Node { return draw.SectionText(v.Profile, v.Answer, v.Rig, v.Voice) }),
+		v.table(words.SectionTitle, func() *Node { return draw.SectionText(v.Profile, v.Answer, v.Rig, v.Voice) }),
 	)
 }
 
@@ -42,7 +42,7 @@ func putStaff(picture *Node, at draw.Staff) {
 		if class, _ := n.Attr("class"); class != "staff" {
 			return
 		}
-		kept := []Attr{With("data-region", "staff"), With("transform", at.Transform())}
+		kept := []Attr{{Name: "data-region", Value: "staff"}, {Name: "transform", Value: at.Transform()}}
 		for _, a := range n.Attrs {
 			if a.Name != "visibility" && a.Name != "transform" {
 				kept = append(kept, a)
@@ -53,9 +53,9 @@ func putStaff(picture *Node, at draw.Staff) {
 }
 
 // table is a picture's figures as text, on demand.
-func (v *viewer) table(name string, make func() *Node) *Node {
+func (v *viewer) table(title words.Key, make func() *Node) *Node {
 	return El("details", Class("in-figures"), El("summary", v.say(words.SameInFigures)),
-		El("div", Class("table-room"), With("role", "region"), With("tabindex", "0"), With("aria-labelledby", name+"-of"), El("span", ID(name+"-of"), Class("unseen"), v.say(words.SameInFigures)), make()))
+		El("div", Class("table-room"), With("role", "group"), With("tabindex", "0"), With("aria-label", v.Voice.Say(title)), make()))
 }
 
 // balance is the wanted pull against every limit's peg.
@@ -73,7 +73,7 @@ func (v *viewer) balance() *Node {
 		region("p", "balance-reading", Class("staff-reading"), With("role", "status"), reading),
 		region("div", "balance-picture", Class("canvas"), draw.Balance(b, v.BalanceSize(), v.Voice, draw.BalanceOptions{WantedN: v.WeightN})),
 		El("div", Class("row"), If(!math.IsNaN(v.WeightN), button("plain", state.WeightBack, "", v.say(words.WeightBackToHill)))),
-		v.table("balance-table", func() *Node { return draw.BalanceText(b, v.Voice) }),
+		v.table(words.BalanceTitle, func() *Node { return draw.BalanceText(b, v.Voice) }),
 	)
 }
 
@@ -90,6 +90,6 @@ func (v *viewer) pull() *Node {
 	return region("section", "pull", Class("picture-part"), opener,
 		El("p", Class("staff-reading"), v.say(words.PullHelp)),
 		El("div", Class("canvas"), draw.PullDiagram(v.Rig, grade, running, v.PullSize(), v.Voice)),
-		v.table("pull-table", func() *Node { return draw.PullText(v.Rig, grade, running, v.Voice) }),
+		v.table(words.PullTitle, func() *Node { return draw.PullText(v.Rig, grade, running, v.Voice) }),
 	)
 }

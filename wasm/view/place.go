@@ -3,6 +3,7 @@ package view
 import (
 	"strings"
 
+	"hillwright/physics/ride"
 	. "hillwright/wasm/dom"
 	"hillwright/wasm/draw"
 	"hillwright/wasm/keep"
@@ -87,7 +88,7 @@ func (v *viewer) choice(kind keep.Kind, id, name, inShort string) *Node {
 	return El("li", button("choice", state.Choose, string(kind)+":"+id, flag("aria-pressed", chosen),
 		tick(chosen),
 		El("span", Class("choice-name"), Text(name),
-			If(v.IsOwn(kind, id), El("span", Class("own"), Text(" · "), v.say(words.HeadKept))),
+			If(v.IsOwn(kind, id), El("span", Class("own"), Text(" · "), v.say(words.OpenKept))),
 			If(chosen && v.AnyChanged(kind), El("span", Class("own"), Text(" · "), v.say(words.KeptChanged)))),
 		If(inShort != "", El("span", Class("in-short"), Text(inShort)))))
 }
@@ -226,14 +227,18 @@ func (v *viewer) sectionsNote(chosen bool) Part {
 // shape is the answer's shape beside its word: a road that goes over the hill,
 // just reaches its top, or ends in it.
 func (v *viewer) shape() *Node {
-	roads := map[string]string{
-		"clears": "M3 27L23 9Q27 5 31 9L45 21",
-		"tight":  "M3 27L25 7",
-		"short":  "M3 27L14 17M10 13L18 21",
+	const hill = "M3 28C12 27 16 10 26 8C33 7 37 14 45 15"
+	road, x, y := hill, "43", "14.7"
+	switch v.Answer.Verdict {
+	case ride.Tight:
+		road, x, y = "M3 28C12 27 16 10 26 8", "26", "8"
+	case ride.Short:
+		road, x, y = "M3 28C9 27 12 22 16 16M10 12L22 20", "", ""
 	}
 	return SVG(Class("shape"), With("viewBox", "0 0 48 32"), With("width", "48"), With("height", "32"), With("aria-hidden", "true"),
-		El("path", Class("shape-hill"), With("d", "M1 31L24 10L47 31Z")),
-		El("path", Class("shape-road"), With("d", roads[v.Answer.Verdict.String()])))
+		El("path", Class("shape-hill"), With("d", hill+"M3 30H45")),
+		El("path", Class("shape-road"), With("d", road)),
+		If(x != "", El("circle", Class("shape-end"), With("cx", x), With("cy", y), With("r", "4.5"))))
 }
 
 // swatches explain the hatching.

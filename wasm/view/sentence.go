@@ -71,10 +71,11 @@ func (v *viewer) day() Part {
 	return v.fill(words.AskDay, v.thing(keep.Day, nil), v.input("day.temperature_c"))
 }
 
+// ride is the short end of the sentence: what else is asked of the ride opens
+// with the assist level.
 func (v *viewer) ride() Part {
-	level := v.inputAs("ride.level", capital(v.level()))
-	law := v.inputAs("ride.law", v.valueOf("ride.law"))
-	return v.fill(words.AskRide, level, v.input("ride.start_mps"), law)
+	return Parts{El("button", With("type", "button"), Class("blank"), ID("blank-"+string(state.Ride)), Act(state.Open, string(state.Ride)),
+		flag("aria-expanded", v.Place == string(state.Ride)), With("aria-controls", "place"), Text(capital(v.level()))), Text(".")}
 }
 
 func (v *viewer) level() string {

@@ -34,6 +34,7 @@ var englishPage = [keys]string{
 	HeadDay:      "Day",
 	HeadRide:     "Ride",
 	HeadKept:     "Kept on this device",
+	OpenKept:     "my things",
 	HeadSettings: "Settings",
 	HeadCautions: "Before riding",
 

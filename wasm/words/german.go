@@ -34,6 +34,7 @@ var germanPage = [keys]string{
 	HeadDay:      "Wetter",
 	HeadRide:     "Fahrt",
 	HeadKept:     "Auf diesem Gerät",
+	OpenKept:     "meine Sachen",
 	HeadSettings: "Einstellungen",
 	HeadCautions: "Vor der Fahrt",
 

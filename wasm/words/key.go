@@ -41,6 +41,7 @@ const (
 	HeadDay
 	HeadRide
 	HeadKept
+	OpenKept
 	HeadSettings
 	HeadCautions
 
