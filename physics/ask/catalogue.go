@@ -132,7 +132,7 @@ var catalogue = []Input{
 	number("ride.charge", "1", 0, 1, 0.03, true, Assumed, func(q *Question) *float64 { return &q.Ride.Charge }),
 	number("ride.charge_kept", "1", 0, 0.9, 0, true, Assumed, func(q *Question) *float64 { return &q.Ride.ChargeKept }),
 	yesNo("ride.back", Assumed, func(q *Question) *bool { return &q.Ride.Back }),
-	whole("ride.trips", 1, 30, func(q *Question) *int { return &q.Ride.Trips }),
+	number("ride.trips", "1", 1, 30, 0, true, Assumed, func(q *Question) *float64 { return &q.Ride.Trips }),
 	number("ride.pause_s", "s", 0, 86400, 0, true, Assumed, func(q *Question) *float64 { return &q.Ride.PauseS }),
 	yesNo("ride.recover", Assumed, func(q *Question) *bool { return &q.Ride.Recover }),
 	number("ride.sight_m", "m", 3, 300, 0.3, false, Assumed, func(q *Question) *float64 { return &q.Ride.SightM }),
@@ -290,19 +290,6 @@ const classDefault = "assumed"
 // to the class default, with the default's own band.
 func completed(path, unitName string, low, high float64, at func(*Question) *float64) Input {
 	return blank(number(path, unitName, low, high, 0.05, false, Sheet, at), classDefault)
-}
-
-func whole(path string, low, high int, at func(*Question) *int) Input {
-	return Input{Path: path, Unit: "1", Form: Whole, Low: float64(low), High: float64(high), Source: Assumed, text: func(q *Question) (func() string, func(string) bool) {
-		return func() string { return strconv.Itoa(*at(q)) }, func(s string) bool {
-			n, err := strconv.Atoi(s)
-			if err != nil || n < low || n > high {
-				return false
-			}
-			*at(q) = n
-			return true
-		}
-	}}
 }
 
 // highestLevel is what the level is when it is not given: the most the motor has.

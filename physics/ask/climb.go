@@ -1,6 +1,8 @@
 package ask
 
 import (
+	"math"
+
 	"hillwright/physics/hill"
 	"hillwright/physics/ride"
 	"hillwright/physics/rig"
@@ -30,7 +32,7 @@ func (q *Question) options() ride.Options {
 	o := &q.Ride
 	return ride.Options{
 		StartMps: o.StartMps, DownMps: o.DownMps, Charge: o.Charge, Reserve: o.ChargeKept,
-		Back: o.Back, Trips: o.Trips, PauseS: o.PauseS, Recover: o.Recover, SightM: o.SightM, ReactS: o.ReactS,
+		Back: o.Back, Trips: int(math.Round(o.Trips)), PauseS: o.PauseS, Recover: o.Recover, SightM: o.SightM, ReactS: o.ReactS,
 	}
 }
 

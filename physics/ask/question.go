@@ -25,7 +25,7 @@ type Question struct {
 // Ride is how the hill is ridden: the assist level, the speed at its foot and
 // the speed that the brakes hold on the way down [m/s], the law; the pack's
 // charge at the start and what of it is kept back (0 to 1); whether it is there
-// and back, how often, the pause after every way [s]; whether a motor that can
+// and back, how often (rounded to whole trips), the pause after every way [s]; whether a motor that can
 // recovers on the way down; the way that one sees there [m] and the time to
 // react [s].
 type Ride struct {
@@ -35,7 +35,7 @@ type Ride struct {
 	LawID              string
 	Charge, ChargeKept float64
 	Back               bool
-	Trips              int
+	Trips              float64
 	PauseS             float64
 	Recover            bool
 	SightM, ReactS     float64

@@ -215,7 +215,7 @@ func TestRestore(t *testing.T) {
 	}
 	got, _ := after(t, Action{Name: Restored, Data: keep.Encode(things), Text: settings})
 	if got.NameOf(keep.Bike) != "Otto" || got.Question.Rider.MassKg != 81 || got.Question.SourceOf("rider.mass_kg") != ask.Measured ||
-		got.Sections != "250 m at 9 %" || got.Voice != s.Voice || got.Theme != "dusk" || got.Answer.TimeS != s.Answer.TimeS {
+		got.Sections != "250 m at 9 %" || got.Voice != s.Voice || got.Theme != "dusk" || got.Answer.ClimbS != s.Answer.ClimbS {
 		t.Errorf("restored %+v", got)
 	}
 	if odd, _ := after(t, Action{Name: Restored, Text: `{"chosen":{"bike":"gone"},"values":{"bike.mass_kg":"x","no.such":"1"},"sources":{"no.such":"sheet"}}`}); odd.Chosen[keep.Bike] != "trekking" || odd.Answer == nil {

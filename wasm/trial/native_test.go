@@ -130,7 +130,7 @@ func (p *tab) answers(a *asked) {
 
 // figures are all figures that stand among the notes.
 func figures(c climbed, v words.Voice) []string {
-	list := []string{v.Grade(c.Balance.SteepestGrade), v.Duration(c.TimeS)}
+	list := []string{v.Grade(c.Balance.SteepestGrade), v.Duration(c.ClimbS)}
 	for i, peg := range c.Balance.Pegs {
 		if i < 2 {
 			list = append(list, v.Limit(peg.Limit), v.Headroom(peg.Headroom))

@@ -41,17 +41,17 @@ func TestBrokenCatalogueIsCaught(t *testing.T) {
 }
 
 func TestSay(t *testing.T) {
-	if got := inEnglish.Say(SharePair, "40 %", "60 %"); got != "rider 40 %, motor 60 %" {
+	if got := inEnglish.Say(NoteBand, "40 %", "60 %"); got != "likely 40 % to 60 %" {
 		t.Error(got)
 	}
-	if got := inGerman.Say(SharePair, "40 %"); got != "Fahrer 40 %, Motor " {
+	if got := inGerman.Say(NoteBand, "40 %"); got != "wohl 40 % bis " {
 		t.Errorf("a blank without an argument stays empty: %q", got)
 	}
 	if got := (Voice{Lang: 200}).Say(ButtonDone); got != "done" {
 		t.Errorf("a language that is not there falls back to English: %q", got)
 	}
 	// An argument is not read again for blanks.
-	if got := inEnglish.Say(SharePair, "{1}", "x"); got != "rider {1}, motor x" {
+	if got := inEnglish.Say(NoteBand, "{1}", "x"); got != "likely {1} to x" {
 		t.Error(got)
 	}
 }

@@ -20,7 +20,6 @@ const (
 	AskRider
 	AskLoad
 	AskDay
-	AskRide
 	AskLevel
 	AskLevelOff
 	AskLevelHighest
@@ -29,10 +28,8 @@ const (
 
 	// Headings of the page's parts.
 	HeadAnswer
-	HeadWhy
 	HeadInputs
 	HeadFigures
-	HeadPictures
 	HeadLimits
 	HeadBike
 	HeadRider
@@ -54,7 +51,6 @@ const (
 	LabelWanted
 	LabelAllowed
 	LabelSpeed
-	LabelMeanSpeed
 	LabelGear
 	LabelCadence
 	LabelTime
@@ -63,27 +59,16 @@ const (
 	LabelRiderEnergy
 	LabelMotorEnergy
 	LabelPackEnergy
-	LabelPackPart
 	LabelLength
 	LabelAscent
-	LabelDescent
 	LabelGrade
-	LabelSteepest
 	LabelSteepestHeld
 	LabelStalledAt
-	LabelHeight
-	LabelDevelopment
-	LabelBand
 	LabelSource
 
 	// StretchAt: length, grade, where from along the road.
 	StretchAt
 
-	// SharePair: rider's and motor's part.
-	SharePair
-
-	// PackOf: energy used, part of the pack.
-	PackOf
 	HeadroomLeft
 	HeadroomShort
 	GearNone
@@ -114,7 +99,6 @@ const (
 
 	// StaffText: where, grade, speed, gear, headroom.
 	StaffText
-	StaffLabel
 	Exaggeration
 	HatchOpen
 	HatchClose
@@ -125,8 +109,6 @@ const (
 	// BalanceText: wanted pull, grade, speed of the weighing.
 	BalanceText
 
-	// BalancePeg: limit, pull, headroom.
-	BalancePeg
 	BalanceWeight
 
 	// BalanceTried: the grade that a dragged weight stands for.
@@ -140,30 +122,22 @@ const (
 	// PullTextNone: grade.
 	PullTextNone
 	PullLoad
-	PullOutline
 	AxisSpeed
 	AxisPull
 	AxisLength
 	AxisHeight
 
 	// Buttons.
-	ButtonChange
 	ButtonDone
 	ButtonCancel
 	ButtonSave
-	ButtonSaveAs
 	ButtonForget
-	ButtonRename
-	ButtonChoose
 	ButtonUndo
-	ButtonMore
 	ButtonLess
 	ButtonClose
 	ButtonFile
-	ButtonSections
 	ButtonExport
 	ButtonImport
-	ButtonInstall
 	ButtonPrint
 	ButtonUseNew
 	ButtonBackToShop
@@ -186,7 +160,6 @@ const (
 	KeptSaved
 	KeptForgotten
 	KeptChanged
-	FromShop
 
 	// Hills.
 	HillDrop
@@ -197,11 +170,8 @@ const (
 	HillRead
 	HillTyped
 	HillTrack
-	HillLevel
 
 	// The device, settings and the network.
-	OfflineReady
-	OfflineNow
 	NewVersion
 	SetLanguage
 	SetUnits
@@ -225,9 +195,6 @@ const (
 
 	// ExportDone: file name.
 	ExportDone
-	Working
-	Starting
-	NeedsWasm
 
 	// The panel when something broke.
 	BrokeTitle
@@ -279,7 +246,6 @@ const (
 	CautionGrip
 	CautionLoad
 	CautionLaw
-	CautionWorkshop
 	CautionPractice
 	CautionEstimate
 

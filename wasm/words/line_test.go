@@ -64,7 +64,7 @@ func TestLines(t *testing.T) {
 	q := ask.Default()
 	tour := func(back bool, trips int, pauseS float64) *ask.Question {
 		c := q
-		c.Ride.Back, c.Ride.Trips, c.Ride.PauseS = back, trips, pauseS
+		c.Ride.Back, c.Ride.Trips, c.Ride.PauseS = back, float64(trips), pauseS
 		return &c
 	}
 	down := func(by road.StopLimit, most, stopping float64, byHeat bool) *ride.WayDown {
