@@ -15,6 +15,7 @@ type book struct {
 	revisions map[string]int
 	shown     map[string]*region
 	last      int // revisions are unique over all regions
+	born      int
 }
 
 func newBook() *book {
@@ -104,10 +105,12 @@ type region struct {
 	Book     *book  `vecty:"prop"`
 	Name     string `vecty:"prop"`
 	Revision int    `vecty:"prop"`
+	born     int    // numbers components as they are made; no prop: it stays what it was
 }
 
 func (b *book) component(name string) *region {
-	return &region{Book: b, Name: name, Revision: b.revisions[name]}
+	b.born++
+	return &region{Book: b, Name: name, Revision: b.revisions[name], born: b.born}
 }
 
 // SkipRender implements vecty.RenderSkipper.
@@ -118,7 +121,11 @@ func (r *region) SkipRender(prev vecty.Component) bool {
 
 // Render implements vecty.Component.
 func (r *region) Render() vecty.ComponentOrHTML {
-	r.Book.shown[r.Name] = r
+	// A component that moved to another place among its siblings is made anew,
+	// and the library may still render the old one once more: the newest counts.
+	if was := r.Book.shown[r.Name]; was == nil || was.born <= r.born {
+		r.Book.shown[r.Name] = r
+	}
 	r.Revision = r.Book.revisions[r.Name]
 	n := r.Book.nodes[r.Name]
 	return r.Book.element(n, inPicture(n))

@@ -38,6 +38,7 @@ func theBrowser(t testing.TB) context.Context {
 		flags := append(chromedp.DefaultExecAllocatorOptions[:],
 			chromedp.ExecPath(path), chromedp.NoSandbox, chromedp.DisableGPU, chromedp.UserDataDir(profile),
 			chromedp.Flag("disable-quic", true), chromedp.Flag("disable-component-update", true),
+			chromedp.Flag("disable-features", "Translate,AutofillServerCommunication,OptimizationHints"),
 			chromedp.Flag("lang", "en-GB"),
 			chromedp.ProxyServer(address), chromedp.Flag("proxy-bypass-list", "127.0.0.1"))
 		start, stop := chromedp.NewExecAllocator(context.Background(), flags...)

@@ -41,20 +41,28 @@ type spot struct {
 // thumb is how large what is touched must be at least [CSS px].
 const thumb = 48
 
-// spotOf waits for an element, brings it into view and measures it.
+// spotOf waits for an element that shows, brings it into view, and measures it
+// once it lies still for some frames: what was done just before may yet be
+// drawn.
 func (p *tab) spotOf(selector string) spot {
 	p.t.Helper()
 	const visible = `[...document.querySelectorAll($1)].find(e => e.getClientRects().length > 0)`
 	p.until("there is "+selector, visible+" !== undefined", selector)
 	return eval[spot](p, `new Promise(done => {
-		const e = `+visible+`;
-		e.scrollIntoView({block: "center", behavior: "instant"});
-		requestAnimationFrame(() => {
-			const b = e.getBoundingClientRect(), x = b.x + b.width/2, y = b.y + b.height/2;
-			const top = document.elementFromPoint(x, y);
+		let last = null, place = "", still = 0;
+		const look = () => {
+			const e = `+visible+`;
+			if (!e) return requestAnimationFrame(look);
+			if (e !== last || !still) e.scrollIntoView({block: "center", behavior: "instant"});
+			const b = e.getBoundingClientRect(), now = [b.x, b.y, b.width, b.height].join();
+			still = e === last && now === place ? still + 1 : 0;
+			[last, place] = [e, now];
+			if (still < 3) return requestAnimationFrame(look);
+			const x = b.x + b.width/2, y = b.y + b.height/2, top = document.elementFromPoint(x, y);
 			done({X: x, Y: y, Wide: b.width, Tall: b.height,
 				Over: !top ? "nothing: it is off the screen" : e.contains(top) || top.contains(e) ? "" : top.outerHTML.slice(0, 120)});
-		})})`, selector)
+		};
+		look(); })`, selector)
 }
 
 // tap touches an element in its middle, as a thumb does, and fails when it is

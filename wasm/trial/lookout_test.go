@@ -38,7 +38,7 @@ func (w *watch) ServeHTTP(out http.ResponseWriter, r *http.Request) {
 }
 
 // own are hosts that the browser asks for by itself, without any page.
-var own = []string{"accounts.google.com", "optimizationguide-pa.googleapis.com", "update.googleapis.com", "clients2.google.com", "safebrowsing.googleapis.com"}
+var own = []string{"accounts.google.com", "optimizationguide-pa.googleapis.com", "update.googleapis.com", "clients2.google.com", "safebrowsing.googleapis.com", "content-autofill.googleapis.com", "redirector.gvt1.com"}
 
 // seen gives what was asked for since the last call.
 func (w *watch) seen() []string {

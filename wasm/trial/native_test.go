@@ -24,9 +24,6 @@ type asked struct {
 	road  *hill.Profile
 }
 
-// english is the voice of a page that was never told anything else.
-var english = words.Voice{}
-
 // ask puts the shop's things together; an empty id is the first of its kind.
 func newAsked(t testing.TB, bike, rider, load, day, road string) *asked {
 	t.Helper()
@@ -34,7 +31,7 @@ func newAsked(t testing.TB, bike, rider, load, day, road string) *asked {
 	if err != nil {
 		t.Fatal(err)
 	}
-	a := &asked{t: t, shop: &from.Shop.Shop, voice: english, q: ask.Default()}
+	a := &asked{t: t, shop: &from.Shop.Shop, voice: English, q: ask.Default()}
 	a.set("ride.law", a.shop.LawID)
 	a.take(keep.Bike, bike)
 	a.take(keep.Rider, rider)

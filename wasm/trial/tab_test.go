@@ -9,6 +9,7 @@ import (
 	"strings"
 	"sync"
 	"testing"
+	"time"
 
 	"github.com/chromedp/cdproto/log"
 	"github.com/chromedp/cdproto/network"
@@ -152,11 +153,15 @@ func withArgs(script string, args []any) string {
 // until waits, frame by frame, until a script gives true.
 func (p *tab) until(what, script string, args ...any) {
 	p.t.Helper()
-	_, err := chromedp.Run(p.ctx, chromedp.Evaluate[bool](withArgs(`new Promise(done => {
+	ctx, cancel := context.WithTimeout(p.ctx, patience)
+	defer cancel()
+	_, err := chromedp.Run(ctx, chromedp.Evaluate[bool](withArgs(`new Promise(done => {
 		const look = () => { let yes = false; try { yes = (`+script+`) } catch { /* not there yet */ }
 			yes ? done(true) : requestAnimationFrame(look) }; look() })`, args), chromedp.EvalAwaitPromise))
 	if err != nil {
-		state, _ := chromedp.Run(context.WithoutCancel(p.ctx), chromedp.Evaluate[string](`document.querySelector("#app").innerText.slice(0, 1500)`))
+		last, end := context.WithTimeout(context.WithoutCancel(p.ctx), 2*time.Second)
+		defer end()
+		state, _ := chromedp.Run(last, chromedp.Evaluate[string](`document.querySelector("#app").innerText.slice(0, 1500)`))
 		p.fatal(fmt.Errorf("waited for: %s: %w\nthe page shows:\n%s", what, err, state))
 	}
 }

@@ -19,6 +19,9 @@ import (
 // most is how long one test may take on a machine that does other things too.
 const most = time.Minute
 
+// patience is how long the page may take to show one thing.
+const patience = 20 * time.Second
+
 // browserPath is chromium, or a failed test; without HILLWRIGHT_FULL the test
 // is skipped.
 func browserPath(t testing.TB) string {
