@@ -104,7 +104,8 @@ func (j job) change() {
 func (j job) pictures() {
 	j.t.Helper()
 	c, v := j.asked.answer(), j.asked.voice
-	running, _ := ride.Settle(c.rig, ride.At(c.Balance.Grade, j.asked.q.Day.WindMps), j.asked.q.Ride.DownMps)
+	fresh := c.rig.Fresh(j.asked.q.Ride.Charge)
+	running, _ := ride.Settle(c.rig, ride.At(c.Balance.Grade, j.asked.q.Day.WindMps), &fresh, j.asked.q.Ride.DownMps)
 	if eval[string](j.tab, `document.querySelector('[data-act=pull]').getAttribute("aria-expanded")`) == "false" {
 		j.tap(act("pull", ""))
 	}
