@@ -30,34 +30,65 @@ func regionOf(n *dom.Node) string {
 	return name
 }
 
-// take compares a new tree with the last one and renders anew the regions that
-// differ, each without those inside it.
-func (b *book) take(tree *dom.Node) {
-	b.region(whole, tree)
-}
+// few is how many regions are rendered one by one. The library gives each frame
+// only so much time and leaves the rest to later ones: more than a few regions
+// are rendered in one go from the top instead, so that none shows an older
+// state beside the others.
+const few = 3
 
-func (b *book) region(name string, n *dom.Node) {
-	was := b.nodes[name]
-	b.nodes[name] = n
-	if was == nil || !b.same(was, n, true) {
-		b.last++
-		b.revisions[name] = b.last
-		if r := b.shown[name]; r != nil && r.Name == name {
-			r.Revision = b.last
+// take compares a new tree with the last one and renders anew the regions that
+// differ.
+func (b *book) take(tree *dom.Node) {
+	found := &differences{}
+	b.compare(whole, tree, found)
+	again := found.own
+	if len(again) > few {
+		for _, name := range found.above {
+			b.revise(name)
+		}
+		again = []string{whole}
+	}
+	for _, name := range found.own {
+		b.revise(name)
+	}
+	for _, name := range again {
+		if r := b.shown[name]; r != nil {
+			r.Revision = b.revisions[name]
 			vecty.Rerender(r)
 		}
 	}
-	b.inside(n)
 }
 
-func (b *book) inside(n *dom.Node) {
+// differences are the regions that differ by themselves, and those that hold
+// such ones.
+type differences struct{ own, above []string }
+
+func (b *book) compare(name string, n *dom.Node, found *differences) {
+	was := b.nodes[name]
+	b.nodes[name] = n
+	before := len(found.own)
+	b.inside(n, found)
+	if len(found.own) > before {
+		found.above = append(found.above, name)
+	}
+	if was == nil || !b.same(was, n, true) {
+		found.own = append(found.own, name)
+	}
+}
+
+func (b *book) inside(n *dom.Node, found *differences) {
 	for _, kid := range n.Kids {
 		if name := regionOf(kid); name != "" {
-			b.region(name, kid)
+			b.compare(name, kid, found)
 		} else {
-			b.inside(kid)
+			b.inside(kid, found)
 		}
 	}
+}
+
+func (b *book) revise(name string) {
+	b.last++
+	b.revisions[name] = b.last
 }
 
 // same tells whether two trees are alike; a region inside counts by its name
