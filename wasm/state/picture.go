@@ -44,9 +44,9 @@ func (s *State) size(tall, px float64) draw.Size {
 const steps = 50
 
 // doPicture does what a finger does on a picture.
-func (s *State) doPicture(a Action) (bool, []Effect) {
+func (s *State) doPicture(a Action) bool {
 	if s.Answer == nil || s.Profile == nil {
-		return false, nil
+		return false
 	}
 	switch a.Name {
 	case Pull:
@@ -71,9 +71,9 @@ func (s *State) doPicture(a Action) (bool, []Effect) {
 	case WeightBack:
 		s.WeightN = nowhere
 	default:
-		return false, nil
+		return false
 	}
-	return true, nil
+	return true
 }
 
 func signed(arg string) float64 {

@@ -11,6 +11,9 @@ import (
 // is not altered. An action that is not known changes nothing.
 func Reduce(prev *State, a Action) (*State, []Effect) {
 	next := prev.clone()
+	if next.doPicture(a) {
+		return next, nil // a finger on a picture changes nothing that is kept
+	}
 	effects := next.do(a)
 	if next.stale {
 		next.answer()
@@ -34,9 +37,6 @@ func (s *State) do(a Action) []Effect {
 		return effects
 	}
 	if did, effects := s.doHill(a); did {
-		return effects
-	}
-	if did, effects := s.doPicture(a); did {
 		return effects
 	}
 	return s.doRest(a)

@@ -270,6 +270,17 @@ func TestComponentFieldsAreProps(t *testing.T) {
 	}
 }
 
+// BenchmarkDrag is the time for one move of a finger along the section.
+func BenchmarkDrag(b *testing.B) {
+	s := after("en")
+	x := 0.0
+	for b.Loop() {
+		x += 7
+		s, _ = state.Reduce(s, state.Action{Name: state.MoveStaff, X: math.Mod(x, 328)})
+		Page(s)
+	}
+}
+
 // BenchmarkPage is the time for the whole page after an action: it must fit
 // into a frame many times over.
 func BenchmarkPage(b *testing.B) {
