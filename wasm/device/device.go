@@ -12,7 +12,8 @@ type Device struct {
 	database js.Value // undefined where storage is refused
 	asked    bool     // whether storage was asked to last
 	worker   *worker
-	stopped  int // how many readings were stopped: an older inline one ends
+	dressed  bool // the browser's frame was given a colour
+	stopped  int  // how many readings were stopped: an older inline one ends
 }
 
 // New takes hold of the browser.
@@ -113,9 +114,25 @@ func (d *Device) Dress(lang, theme string) {
 	html.Call("setAttribute", "lang", lang)
 	if theme == "" {
 		html.Call("removeAttribute", "data-theme")
+	} else {
+		html.Call("setAttribute", "data-theme", theme)
+	}
+	d.dressFrame(theme)
+}
+
+// dressFrame gives the browser's own frame the page's colour where the person
+// chose another light than the device's. Without a choice the page's head says
+// it for either light.
+func (d *Device) dressFrame(theme string) {
+	frames := document().Call("querySelectorAll", "meta[name=theme-color]")
+	if theme == "" && !d.dressed {
 		return
 	}
-	html.Call("setAttribute", "data-theme", theme)
+	d.dressed = true
+	colour := window().Call("getComputedStyle", document().Get("body")).Get("backgroundColor")
+	for i := range frames.Length() {
+		frames.Index(i).Call("setAttribute", "content", colour)
+	}
 }
 
 // Tap is a touch that came before the program ran.

@@ -1,6 +1,9 @@
 package keep
 
-import "strconv"
+import (
+	"bytes"
+	"strconv"
+)
 
 // Things is what a person has saved: bikes, riders, loads and days, and hills.
 type Things struct {
@@ -96,6 +99,9 @@ func putChanged(out []byte, at int64) []byte {
 func Decode(data []byte) (Things, []Fault) {
 	if len(data) > LargestFile {
 		return Things{}, []Fault{{Kind: FileTooLarge, Detail: strconv.Itoa(LargestFile >> 20)}}
+	}
+	if text := bytes.TrimSpace(data); len(text) == 0 || text[0] != '{' {
+		return Things{}, []Fault{{Kind: NotOurs}}
 	}
 	root, line, column, want := readJSON(data)
 	if want != "" {

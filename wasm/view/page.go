@@ -51,11 +51,6 @@ func region(tag, name string, parts ...Part) *Node {
 	return n
 }
 
-// heading is a part's heading, for ears only where the look needs none.
-func (v *viewer) heading(k words.Key, class string) *Node {
-	return El("h2", If(class != "", Class(class)), v.say(k))
-}
-
 // button is a thing to touch that is not a blank of the sentence.
 func button(class, act, arg string, parts ...Part) *Node {
 	n := El("button", With("type", "button"), Class(class), Act(act, arg))
