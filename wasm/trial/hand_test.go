@@ -7,6 +7,7 @@ import (
 	"fmt"
 	"os"
 	"path/filepath"
+	"time"
 
 	"github.com/chromedp/cdproto/browser"
 	"github.com/chromedp/cdproto/cdp"
@@ -89,8 +90,12 @@ func (p *tab) drag(selector string, by ...float64) {
 		one := 1.0
 		return []*input.TouchPoint{{X: s.X + part*wide, Y: s.Y, RadiusX: &one, RadiusY: &one, Force: &one, ID: new(float64)}}
 	}
+	// A finger that stops before it is lifted: one that is lifted in full flight
+	// sets off a fling, and the browser takes the next touch for stopping that.
+	when := float64(time.Now().UnixMilli())/1000 - 1
 	touch := func(kind input.DispatchTouchEventType, points []*input.TouchPoint) {
-		call(p, input.DispatchTouchEvent, input.DispatchTouchEventParams{Type: kind, TouchPoints: points})
+		call(p, input.DispatchTouchEvent, input.DispatchTouchEventParams{Type: kind, TouchPoints: points, Timestamp: input.TimeSinceEpoch(when)})
+		when += 0.2
 	}
 	touch(input.DispatchTouchEventTypeTouchStart, at(0))
 	for _, part := range by {
@@ -137,12 +142,16 @@ func (p *tab) download(selector string) (name string, data []byte) {
 		p.fatal(err)
 	}
 	ended := make(chan browser.EventDownloadProgress, 8)
+	frame := cdp.FrameID(chromedp.FromContext(p.ctx).Target.TargetID)
+	var mine string // the browser tells of other tabs' files too
 	err = chromedp.ListenBrowser(p.ctx, func(event any) {
 		switch e := event.(type) {
 		case *browser.EventDownloadWillBegin:
-			name = e.SuggestedFilename
+			if e.FrameID == frame {
+				name, mine = e.SuggestedFilename, e.GUID
+			}
 		case *browser.EventDownloadProgress:
-			if e.State != browser.DownloadProgressStateInProgress {
+			if e.GUID == mine && e.State != browser.DownloadProgressStateInProgress {
 				ended <- *e
 			}
 		}
@@ -156,9 +165,12 @@ func (p *tab) download(selector string) (name string, data []byte) {
 		if e.State != browser.DownloadProgressStateCompleted {
 			p.fatal(selector + ": the download was " + string(e.State))
 		}
-		data, err = os.ReadFile(filepath.Join(dir, e.GUID))
-		if err != nil {
-			p.fatal(err)
+		// The browser may tell before the file has its name.
+		for file := filepath.Join(dir, e.GUID); ; {
+			if data, err = os.ReadFile(file); err == nil {
+				break
+			}
+			eval[bool](p, `new Promise(done => requestAnimationFrame(() => done(true)))`)
 		}
 	case <-p.ctx.Done():
 		p.fatal(selector + " gave no file")

@@ -26,7 +26,6 @@ func TestMainJob(t *testing.T) {
 		dumb   bool
 	}{{phone, below, true}, {tablet, atRoot, false}} {
 		t.Run(each.device.name, func(t *testing.T) {
-			t.Parallel()
 			p := newTab(t, each.device, newHost(t, each.prefix, each.dumb))
 			p.visit()
 			p.answers(newAsked(t, "", "", "", "", ""))
