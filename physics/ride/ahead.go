@@ -23,6 +23,9 @@ func (s *run) wantsShift(now *rig.Now) bool {
 }
 
 func (s *run) wish(now *rig.Now) (gear int, wants bool) {
+	if s.shift.busy() {
+		return s.shift.gear, false
+	}
 	v := s.speed()
 	// What is lost while the chain moves, from the net force there was.
 	pull := s.rig.PullAt(v, s.shift.gear, now).Sum()

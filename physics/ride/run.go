@@ -157,7 +157,7 @@ func (s *run) finish() {
 
 // closeM is how near to the place where something happens (a shift, a stall) a
 // step must end [m].
-const closeM = 0.002
+const closeM = 0.02
 
 // advance takes a step, a shorter one when something happens within it, so
 // that events do not depend on where the steps happen to fall.

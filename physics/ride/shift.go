@@ -97,9 +97,6 @@ func (s *shifter) best(r *rig.Rig, v float64) int {
 // costs is what a shift takes of the speed [m/s]: nobody changes up where it
 // would stop them.
 func (s *shifter) wants(r *rig.Rig, v, aimMps, costs float64, now *rig.Now) (to int, wants bool) {
-	if s.under() || s.sinceS < restS {
-		return s.gear, false
-	}
 	to = s.best(r, aimMps)
 	if to == s.gear || to > s.gear && v-costs < saveSpeed*r.Rider.HoldMps {
 		return s.gear, false
@@ -123,6 +120,9 @@ func (s *shifter) suits(r *rig.Rig, v float64) bool {
 	c := r.CadenceAt(v, s.gear)
 	return c >= r.Rider.CadenceLow && c <= r.Rider.CadenceHigh
 }
+
+// busy tells that a shift is under way or that the last one was just now.
+func (s *shifter) busy() bool { return s.under() || s.sinceS < restS }
 
 // under tells whether a shift is under way.
 func (s *shifter) under() bool { return s.leftS > 0 }

@@ -123,13 +123,15 @@ func (g *Rig) StrongestGear(speedMps float64, now *Now) int {
 // asks for all there is: most pull, and of those nearly as good the one whose
 // cadence lies nearest to the liked one.
 func (g *Rig) BestGear(speedMps float64, now *Now) int {
-	most := 0.0
+	var few [32]float64
+	pulls, most := few[:0], 0.0
 	for i := range g.Gears {
-		most = math.Max(most, g.PullAt(speedMps, i, now).Sum())
+		pull := g.PullAt(speedMps, i, now).Sum()
+		pulls, most = append(pulls, pull), math.Max(most, pull)
 	}
 	best, off := 0, math.Inf(1)
-	for i := range g.Gears {
-		if g.PullAt(speedMps, i, now).Sum() < near*most {
+	for i, pull := range pulls {
+		if pull < near*most {
 			continue
 		}
 		if d := g.OffLiked(speedMps, i); d < off {
