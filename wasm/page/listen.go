@@ -76,7 +76,9 @@ func isField(act string) bool {
 }
 
 // isDrag tells that an action follows the finger.
-func isDrag(act string) bool { return act == state.MoveStaff || act == state.MoveWeight }
+func isDrag(act string) bool {
+	return act == state.MoveStaff || act == state.MoveWeight || act == state.Sketch
+}
 
 func (h *hand) do(a state.Action) {
 	a.Now = h.page.works.Now()
@@ -162,12 +164,14 @@ func (h *hand) move(e js.Value) {
 	}
 	picture := h.drag.Get("ownerSVGElement")
 	box := picture.Call("getBoundingClientRect")
-	wide := box.Get("width").Float()
-	if wide == 0 {
+	inside := picture.Get("viewBox").Get("baseVal")
+	at := func(client, edge, size string) float64 {
+		return (e.Get(client).Float() - box.Get(edge).Float()) / box.Get(size).Float() * inside.Get(size).Float()
+	}
+	if box.Get("width").Float() == 0 {
 		return
 	}
-	x := (e.Get("clientX").Float() - box.Get("left").Float()) / wide * picture.Get("viewBox").Get("baseVal").Get("width").Float()
-	h.do(state.Action{Name: h.act, X: x})
+	h.do(state.Action{Name: h.act, X: at("clientX", "left", "width"), Y: at("clientY", "top", "height")})
 }
 
 func (h *hand) up(js.Value) {

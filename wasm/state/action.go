@@ -9,6 +9,7 @@ type Action struct {
 	Arg  string  // what it is about: a path, "kind:id", a place of the page
 	Text string  // what was typed
 	X    float64 // a place in a picture [px of its viewBox], a part done, a width
+	Y    float64 // with X, the place in a sketch
 	Data []byte  // a file's content
 	Hill *hill.Profile
 	Err  error
@@ -31,32 +32,35 @@ const (
 	Reset    = "reset"     // Arg: path, back to the chosen thing's value
 	Choose   = "choose"    // Arg: kind:id
 
-	TypeSections = "sections"    // Text: the whole field
-	PickTrack    = "track-pick"  // asks for a file
-	StopTrack    = "track-stop"  // stops the reading
-	TypeName     = "name"        // Arg: kind, Text: the whole field
-	Keep         = "keep"        // Arg: kind: saves what is chosen, with its changes, under the typed name
-	Forget       = "forget"      // Arg: kind:id
-	Export       = "export"      // everything as a file
-	PickImport   = "import-pick" // asks for a file
-	Figures      = "figures"     // the answer as a file of JSON
-	Share        = "share"       // hands the answer's sentences on
-	Print        = "print"       //
-	Undo         = "undo"        //
-	Dismiss      = "dismiss"     // takes the message away
-	Pull         = "pull"        // shows or hides the pull diagram
-	MoveStaff    = "move-staff"  // X: place in the section
-	StaffStep    = "staff-step"  // Arg: "+" or "-": a fiftieth of the hill
-	MoveWeight   = "drag-weight" // X: place in the balance
-	WeightStep   = "weight-step" // Arg: "+" or "-": a fiftieth of what is wanted
-	WeightBack   = "weight-back" // the weight hangs again where the hill puts it
-	SetLanguage  = "language"    // Arg: tag
-	SetUnits     = "units"       // Arg: metric or imperial
-	SetMark      = "mark"        // Arg: point or comma
-	SetTheme     = "theme"       // Arg: sun, dusk, or device
-	UseNew       = "use-new"     // takes the new version
-	GoOn         = "go-on"       // after something broke
-	SaveBroken   = "broke-save"  // everything as a file, after something broke
+	TypeSections = "sections"     // Text: the whole field
+	Sketch       = "sketch"       // X, Y: where the finger is, in the sketch
+	SketchClear  = "sketch-clear" // begins again
+	SketchLong   = "sketch-long"  // Arg: how long the sketch is [m]
+	PickTrack    = "track-pick"   // asks for a file
+	StopTrack    = "track-stop"   // stops the reading
+	TypeName     = "name"         // Arg: kind, Text: the whole field
+	Keep         = "keep"         // Arg: kind: saves what is chosen, with its changes, under the typed name
+	Forget       = "forget"       // Arg: kind:id
+	Export       = "export"       // everything as a file
+	PickImport   = "import-pick"  // asks for a file
+	Figures      = "figures"      // the answer as a file of JSON
+	Share        = "share"        // hands the answer's sentences on
+	Print        = "print"        //
+	Undo         = "undo"         //
+	Dismiss      = "dismiss"      // takes the message away
+	Pull         = "pull"         // shows or hides the pull diagram
+	MoveStaff    = "move-staff"   // X: place in the section
+	StaffStep    = "staff-step"   // Arg: "+" or "-": a fiftieth of the hill
+	MoveWeight   = "drag-weight"  // X: place in the balance
+	WeightStep   = "weight-step"  // Arg: "+" or "-": a fiftieth of what is wanted
+	WeightBack   = "weight-back"  // the weight hangs again where the hill puts it
+	SetLanguage  = "language"     // Arg: tag
+	SetUnits     = "units"        // Arg: metric or imperial
+	SetMark      = "mark"         // Arg: point or comma
+	SetTheme     = "theme"        // Arg: sun, dusk, or device
+	UseNew       = "use-new"      // takes the new version
+	GoOn         = "go-on"        // after something broke
+	SaveBroken   = "broke-save"   // everything as a file, after something broke
 )
 
 // What the device reports.
@@ -80,7 +84,7 @@ const (
 func ByHand() []string {
 	return []string{
 		Open, Close, ShowPath, ShowAll, StepUp, StepDown, Type, Typed, SetTo, SourceTo, Reset, Choose,
-		TypeSections, PickTrack, StopTrack, TypeName, Keep, Forget, Export, PickImport,
+		TypeSections, Sketch, SketchClear, SketchLong, PickTrack, StopTrack, TypeName, Keep, Forget, Export, PickImport,
 		Figures, Share, Print, Undo, Dismiss, Pull, MoveStaff, StaffStep, MoveWeight, WeightStep, WeightBack,
 		SetLanguage, SetUnits, SetMark, SetTheme, UseNew, GoOn, SaveBroken,
 	}

@@ -23,6 +23,12 @@ func (s *State) doHill(a Action) (bool, []Effect) {
 	case TypeSections:
 		s.Sections = a.Text
 		s.chooseHill(TypedHill)
+	case Sketch:
+		s.draw(a.X, a.Y)
+	case SketchClear:
+		s.Drawn.Points = nil
+	case SketchLong:
+		s.drawLong(a.Arg)
 	case PickTrack:
 		return true, []Effect{{Kind: PickTrackFile}}
 	case TrackFile:
@@ -64,13 +70,16 @@ func (s *State) hillName() string {
 	if h := s.hill(s.Chosen[Hill]); h != nil {
 		return h.Name(s.Voice.Lang.Tag())
 	}
+	if s.Chosen[Hill] == SketchedHill {
+		return s.Voice.Say(words.HillDrawn)
+	}
 	return s.Voice.Say(words.HillTyped)
 }
 
 func (s *State) hint() string { return s.Voice.Say(words.HillSectionsHint) }
 
 func (s *State) chooseHill(id string) {
-	if id != TypedHill && s.hill(id) == nil {
+	if id != TypedHill && id != SketchedHill && s.hill(id) == nil {
 		return
 	}
 	s.Chosen[Hill] = id
@@ -81,14 +90,20 @@ func (s *State) chooseHill(id string) {
 // pickHill makes the profile of the chosen hill. A hill that makes none leaves
 // the last one, and says why.
 func (s *State) pickHill() {
-	id := s.Chosen[Hill]
-	if id == TypedHill {
+	switch id := s.Chosen[Hill]; id {
+	case TypedHill:
 		p, err := hill.ParseSections(s.Sections)
 		if s.SectionsErr = err; err != nil {
 			return
 		}
 		s.Profile = &p
-	} else {
+	case SketchedHill:
+		p, err := s.Drawn.profile()
+		if err != nil {
+			return // a hill begins with its second place
+		}
+		s.Profile = p
+	default:
 		p, err := s.hill(id).Profile(s.Voice.Lang.Tag())
 		if err != nil {
 			s.Trouble = err

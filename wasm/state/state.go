@@ -29,8 +29,12 @@ var kinds = []keep.Kind{keep.Rider, keep.Load, keep.Bike, Hill, keep.Day, Ride}
 // Kinds gives the kinds of things in the order of the sentence.
 func Kinds() []keep.Kind { return append([]keep.Kind(nil), kinds...) }
 
-// TypedHill is the id of the hill that is typed as sections.
-const TypedHill = "typed"
+// TypedHill is the id of the hill that is typed as sections, SketchedHill of
+// the one that is drawn with a finger.
+const (
+	TypedHill    = "typed"
+	SketchedHill = "sketched"
+)
 
 // State is everything that the page shows.
 type State struct {
@@ -55,6 +59,7 @@ type State struct {
 
 	Sections    string // as typed
 	SectionsErr error
+	Drawn       Drawing
 	Name        string // as typed, for what is to be kept
 	Reading     Reading
 
@@ -129,6 +134,7 @@ func First(shop *keep.Shop, lang string) *State {
 		Shop: shop, Chosen: map[keep.Kind]string{},
 		StaffM: math.NaN(), WeightN: math.NaN(),
 		Device: Device{WidthPx: firstWidth},
+		Drawn:  Drawing{LongM: sketchLengths[1]},
 		likes:  likes{deviceLang: lang},
 	}
 	s.Question = ask.Default()

@@ -94,6 +94,12 @@ func TestActions(t *testing.T) {
 		{"choosing what is not there", []Action{{Name: Choose, Arg: "bike:gone"}, {Name: Choose, Arg: "hill:gone"}}, func(s *State) bool { return s.Chosen[keep.Bike] == "trekking" && s.Chosen[Hill] == "school" }},
 		{"sections", []Action{{Name: TypeSections, Text: "200 m at 10 %"}}, func(s *State) bool { return s.SectionsErr == nil && math.Abs(s.Answer.LengthM-200) < 1e-9 }},
 		{"wrong sections keep the answer", []Action{{Name: TypeSections, Text: "200 m at"}}, func(s *State) bool { return s.SectionsErr != nil && math.Abs(s.Answer.LengthM-460) < 1e-9 }},
+		{"a sketch", []Action{{Name: Sketch, X: 0, Y: 160}, {Name: Sketch, X: 160, Y: 80}, {Name: Sketch, X: 161, Y: 70}, {Name: Sketch, X: 320, Y: 80}}, func(s *State) bool {
+			return s.Chosen[Hill] == SketchedHill && len(s.Drawn.Points) == 3 && math.Abs(s.Answer.AscentM-100) < 1e-6 && math.Abs(float64(s.Profile.Grade[0])-0.2) < 1e-9
+		}},
+		{"going back wipes", []Action{{Name: Sketch, X: 0, Y: 160}, {Name: Sketch, X: 200, Y: 80}, {Name: Sketch, X: 100, Y: 120}}, func(s *State) bool { return len(s.Drawn.Points) == 2 && s.Drawn.Points[1].X == 100 }},
+		{"a longer sketch", []Action{{Name: Sketch, X: 0, Y: 160}, {Name: Sketch, X: 320, Y: 80}, {Name: SketchLong, Arg: "3000"}}, func(s *State) bool { return s.Answer.LengthM > 3000 && math.Abs(s.Answer.AscentM-300) < 1e-6 }},
+		{"one point is no hill", []Action{{Name: Sketch, X: 9, Y: 9}, {Name: SketchLong, Arg: "300"}, {Name: SketchClear}}, func(s *State) bool { return s.Chosen[Hill] == "school" && s.Answer.LengthM == 460 }},
 		{"the staff", []Action{{Name: MoveStaff, X: 100}}, func(s *State) bool { return s.StaffM > 0 && s.StaffM < 460 }},
 		{"the staff by keys", []Action{{Name: StaffStep, Arg: "+"}, {Name: StaffStep, Arg: "+"}}, func(s *State) bool { return s.StaffM > s.Answer.Hardest.FromM }},
 		{"the weight", []Action{{Name: WeightStep, Arg: "+"}}, func(s *State) bool { g, ok := s.TriedGrade(); return ok && g > s.Answer.Balance.Grade }},
@@ -234,7 +240,7 @@ func TestAnyOrder(t *testing.T) {
 		for range 30 {
 			a := Action{
 				Name: rapid.SampledFrom(ByHand()).Draw(t, "name"), Arg: rapid.SampledFrom(args).Draw(t, "arg"),
-				Text: rapid.SampledFrom(texts).Draw(t, "text"), X: rapid.Float64Range(-50, 2000).Draw(t, "x"), Now: 9,
+				Text: rapid.SampledFrom(texts).Draw(t, "text"), X: rapid.Float64Range(-50, 2000).Draw(t, "x"), Y: rapid.Float64Range(-50, 300).Draw(t, "y"), Now: 9,
 			}
 			before := *s
 			settings := string(keep.EncodeSettings(s.settings()))

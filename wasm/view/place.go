@@ -160,6 +160,7 @@ func (v *viewer) hills() Part {
 			button("main wide", state.PickTrack, "", v.say(words.ButtonFile)),
 			El("p", Class("hint"), v.say(words.HillDropHelp))),
 		v.sections(),
+		v.sketch(),
 		v.saveAs(state.Hill),
 	}
 }

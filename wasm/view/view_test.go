@@ -53,6 +53,7 @@ func looks() map[string][]state.Action {
 		"hill":         {act(state.Open, "hill")},
 		"sections":     {act(state.Open, "hill"), text(state.TypeSections, "", "300 m at 12 %")},
 		"bad sections": {act(state.Open, "hill"), text(state.TypeSections, "", "300 m 12")},
+		"sketch":       {act(state.Open, "hill"), {Name: state.Sketch, Y: 160}, {Name: state.Sketch, X: 300, Y: 80}},
 		"reading":      {{Name: state.TrackFile, Arg: "a.gpx", Data: []byte("<gpx")}, {Name: state.TrackPart, X: 0.4}},
 		"bad track":    {{Name: state.TrackFile, Arg: "a.gpx"}, {Name: state.TrackFailed, Err: &hill.TrackError{Kind: hill.TrackEmpty}}},
 		"typed wrong":  {act(state.ShowPath, "rider.mass_kg"), text(state.Type, "rider.mass_kg", "9000")},

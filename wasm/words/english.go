@@ -146,6 +146,10 @@ var englishPage = [keys]string{
 	HillReading:      "Reading the track …",
 	HillRead:         "{0}: {1} long, {2} of ascent.",
 	HillTyped:        "typed hill",
+	HillDrawn:        "drawn hill",
+	HillDraw:         "draw a hill with a finger",
+	HillDrawHelp:     "Draw the road from left to right. Going back wipes.",
+	HillDrawAgain:    "wipe it all",
 	HillTrack:        "track",
 
 	NewVersion:     "There is a new version.",

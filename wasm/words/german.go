@@ -146,6 +146,10 @@ var germanPage = [keys]string{
 	HillReading:      "Track wird gelesen …",
 	HillRead:         "{0}: {1} lang, {2} Anstieg.",
 	HillTyped:        "eingetippter Berg",
+	HillDrawn:        "gezeichneter Berg",
+	HillDraw:         "Berg mit dem Finger zeichnen",
+	HillDrawHelp:     "Die Straße von links nach rechts ziehen. Zurück löscht.",
+	HillDrawAgain:    "alles löschen",
 	HillTrack:        "Track",
 
 	NewVersion:     "Es gibt eine neue Fassung.",

@@ -169,6 +169,10 @@ const (
 	HillReading
 	HillRead
 	HillTyped
+	HillDrawn
+	HillDraw
+	HillDrawHelp
+	HillDrawAgain
 	HillTrack
 
 	// The device, settings and the network.
