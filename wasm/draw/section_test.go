@@ -56,6 +56,9 @@ func addPoint(t *ride.Trace, atM, headroom float64) {
 	t.PullN = append(t.PullN, 150)
 	t.Headroom = append(t.Headroom, headroom)
 	t.SetBy = append(t.SetBy, rig.Torque)
+	t.WindingC = append(t.WindingC, 20+atM/10)
+	t.Charge = append(t.Charge, 0.8)
+	t.ReserveJ = append(t.ReserveJ, 12000)
 }
 
 // weighed makes a balance of pulls in order.

@@ -64,22 +64,39 @@ func (s *section) staff(atM float64) Staff {
 // placeOn reads off a ride what holds at a distance [m].
 func placeOn(p *hill.Profile, a *ride.Answer, atM float64) Staff {
 	out := Staff{AtM: atM, HeightM: p.HeightAt(atM), Grade: p.GradeAt(atM)}
+	k, part, known := spotOn(a, atM)
+	if !known {
+		return out
+	}
+	t := &a.Trace
+	out.Known = true
+	out.Gear, out.Headroom, out.Limit = t.Gear[k], t.Headroom[k], t.SetBy[k]
+	out.TimeS, out.SpeedMps = between(t.TimeS, k, part), between(t.SpeedMps, k, part)
+	return out
+}
+
+// spotOn finds a distance [m] on a ride: the point of the trace that holds
+// there and how far it is on the way to the next one; not known beyond a stall.
+func spotOn(a *ride.Answer, atM float64) (k int, part float64, known bool) {
 	t := &a.Trace
 	n := len(t.AtM)
 	if n == 0 || a.Stalled && atM > a.StalledAtM+1e-6 {
-		return out
+		return 0, 0, false
 	}
 	// Of points at one place the last holds for what follows.
-	k := max(0, sort.Search(n, func(k int) bool { return t.AtM[k] > atM+1e-9 })-1)
-	out.Known = true
-	out.Gear, out.Headroom, out.Limit = t.Gear[k], t.Headroom[k], t.SetBy[k]
-	out.TimeS, out.SpeedMps = t.TimeS[k], t.SpeedMps[k]
+	k = max(0, sort.Search(n, func(k int) bool { return t.AtM[k] > atM+1e-9 })-1)
 	if k+1 < n && t.AtM[k+1] > t.AtM[k] {
-		part := (atM - t.AtM[k]) / (t.AtM[k+1] - t.AtM[k])
-		out.TimeS += part * (t.TimeS[k+1] - t.TimeS[k])
-		out.SpeedMps += part * (t.SpeedMps[k+1] - t.SpeedMps[k])
+		part = (atM - t.AtM[k]) / (t.AtM[k+1] - t.AtM[k])
 	}
-	return out
+	return k, part, true
+}
+
+// between reads a trace's values between two of its points.
+func between(of []float64, k int, part float64) float64 {
+	if part == 0 {
+		return of[k]
+	}
+	return of[k] + part*(of[k+1]-of[k])
 }
 
 // StaffText says what the staff shows.

@@ -207,4 +207,9 @@ var englishRide = [keys]string{
 	ReasonPackCurrent:      "Usual current limit for the capacity.",
 	ReasonPackRecovery:     "Usual charging current while riding; some packs take none.",
 	ReasonPackCut:          "Usual low-voltage cut per cell for the chemistry.",
+
+	BandMotor:  "motor",
+	BandLegs:   "legs",
+	BandEasing: "eases off from {0}",
+	BandKept:   "{0} kept back",
 }

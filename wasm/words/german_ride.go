@@ -207,4 +207,9 @@ var germanRide = [keys]string{
 	ReasonPackCurrent:      "Für die Kapazität übliche Stromgrenze.",
 	ReasonPackRecovery:     "Üblicher Ladestrom während der Fahrt; manche Akkus nehmen keinen.",
 	ReasonPackCut:          "Für die Zellchemie übliche Abschaltspannung je Zelle.",
+
+	BandMotor:  "Motor",
+	BandLegs:   "Beine",
+	BandEasing: "nimmt sich ab {0} zurück",
+	BandKept:   "{0} Rückhalt",
 }

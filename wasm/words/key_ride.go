@@ -238,5 +238,12 @@ const (
 	ReasonPackRecovery
 	ReasonPackCut
 
+	// The strip's bands, short. BandEasing: the temperature from which it eases
+	// off. BandKept: the charge kept back.
+	BandMotor
+	BandLegs
+	BandEasing
+	BandKept
+
 	keys // how many there are
 )
