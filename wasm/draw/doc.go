@@ -1,7 +1,8 @@
 // Package draw makes the page's pictures: pure functions from an answer to SVG
 // as a tree of dom nodes, and the same figures as text. Start with Section
 // (the hill as a cut through the ground), Strip (what runs along under it), Balance (the wanted pull against the
-// limits' pegs) and PullDiagram (pull against speed). Hatches must stand once
+// limits' pegs) PullDiagram (pull against speed)
+// and Brakes (how warm they get). Hatches must stand once
 // on a page that shows a Section; Legend explains the hatching.
 //
 // Pictures carry no colours and no style attributes, only classes. The
@@ -30,6 +31,7 @@
 //	band-frame, band-mark, band-line   of the strip: a band's frame (thin), its mark (dashed), what runs along (bold)
 //	band-halo          the same under it where it crosses a hatching (wider, the paper's colour)
 //	band-bad           where a band is beyond its mark (the fill attribute is the pattern: leave fill alone)
+//	bar-mark           the caution on a brake's bar (stroked, bold)
 //	plumb, plumb-line  the line under the staff through the strip: group, line
 //	touch              what a finger takes (fill transparent, pointer-events all, cursor)
 //	barrel, window     the spring balance's body (paper fill, ink stroke) and its slot (filled, faint)

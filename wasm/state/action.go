@@ -19,18 +19,19 @@ type Action struct {
 
 // What a person does. Elements name these in data-act.
 const (
-	Open     = "open"      // Arg: a place that opens under the sentence, or closes when it is open
-	Close    = "close"     // closes what is open
-	ShowPath = "path"      // Arg: an input whose editor opens, or closes when it is open
-	ShowAll  = "all"       // Arg: a place; shows or hides all of its inputs
-	StepUp   = "step-up"   // Arg: path
-	StepDown = "step-down" // Arg: path
-	Type     = "type"      // Arg: path, Text: the whole field
-	Typed    = "typed"     // Arg: path: the field is left
-	SetTo    = "set"       // Arg: path=value
-	SourceTo = "source"    // Arg: path=source
-	Reset    = "reset"     // Arg: path, back to the chosen thing's value
-	Choose   = "choose"    // Arg: kind:id
+	Open      = "open"      // Arg: a place that opens under the sentence, or closes when it is open
+	Close     = "close"     // closes what is open
+	ShowPath  = "path"      // Arg: an input whose editor opens, or closes when it is open
+	ShowAll   = "all"       // Arg: a place; shows or hides all of its inputs
+	StepUp    = "step-up"   // Arg: path
+	StepDown  = "step-down" // Arg: path
+	Type      = "type"      // Arg: path, Text: the whole field
+	Typed     = "typed"     // Arg: path: the field is left
+	SetTo     = "set"       // Arg: path=value
+	SourceTo  = "source"    // Arg: path=source
+	Reset     = "reset"     // Arg: path, back to the chosen thing's value
+	RoundTrip = "tour"      // Arg: how often there and back; 0: one way
+	Choose    = "choose"    // Arg: kind:id
 
 	TypeSections = "sections"     // Text: the whole field
 	Sketch       = "sketch"       // X, Y: where the finger is, in the sketch
@@ -83,7 +84,7 @@ const (
 // ByHand lists the names that an element may carry in data-act.
 func ByHand() []string {
 	return []string{
-		Open, Close, ShowPath, ShowAll, StepUp, StepDown, Type, Typed, SetTo, SourceTo, Reset, Choose,
+		Open, Close, ShowPath, ShowAll, StepUp, StepDown, Type, Typed, SetTo, SourceTo, Reset, RoundTrip, Choose,
 		TypeSections, Sketch, SketchClear, SketchLong, PickTrack, StopTrack, TypeName, Keep, Forget, Export, PickImport,
 		Figures, Share, Print, Undo, Dismiss, Pull, MoveStaff, StaffStep, MoveWeight, WeightStep, WeightBack,
 		SetLanguage, SetUnits, SetMark, SetTheme, UseNew, GoOn, SaveBroken,

@@ -19,7 +19,7 @@ func (s *State) doInput(a Action) (bool, []Effect) {
 		}
 		kind, _ := cut(a.Arg, ".")
 		if s.Place != kind {
-			s.Place, s.All = kind, kind == string(Ride)
+			s.Place, s.All = kind, false
 		}
 		s.Path, s.Name = a.Arg, s.NameOf(kindOf(a.Arg))
 		return true, []Effect{{Kind: Show, Key: "place"}}
@@ -118,16 +118,23 @@ func (s *State) NumberOf(path string) (v float64, given bool) {
 	if v, ok := s.Question.Value(path); ok {
 		return v, true
 	}
-	if s.Rig == nil {
-		return 0, false
-	}
-	switch path {
-	case "day.density_kgm3":
-		return s.Rig.Road.DensityKgM3, false
-	case "bike.rollout_m":
-		return s.Rig.CircumferenceM, false
+	if shown := s.Behind(path); !math.IsNaN(shown.Value) {
+		return shown.Value, false
 	}
 	return 0, false
+}
+
+// Behind is what stands behind an input: its own value, or what the computation
+// takes in its place, with band and reason.
+func (s *State) Behind(path string) ask.Shown {
+	nothing := ask.Shown{Value: math.NaN(), Low: math.NaN(), High: math.NaN(), Source: s.Question.SourceOf(path)}
+	if s.Rig == nil {
+		return nothing
+	}
+	if shown, ok := s.Question.Shown(path, s.Rig); ok {
+		return shown
+	}
+	return nothing
 }
 
 // step moves a number to the next round value in the unit shown, held within

@@ -33,6 +33,9 @@ func (s *State) do(a Action) []Effect {
 	if did, effects := s.doInput(a); did {
 		return effects
 	}
+	if s.doTour(a) {
+		return nil
+	}
 	if did, effects := s.doKept(a); did {
 		return effects
 	}

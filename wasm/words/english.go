@@ -13,7 +13,7 @@ var englishPage = [keys]string{
 	AskClimb:        "{0} with {1} on {2} climbs {3}; the day: {4}.",
 	AskRider:        "{0}, {1}, pedalling {2}",
 	AskLoad:         "{0}, {1}",
-	AskDay:          "{0}, {1}",
+	AskDay:          "{0}, {1}, {2}",
 	AskLevel:        "assist level {0}",
 	AskLevelOff:     "motor off",
 	AskLevelHighest: "highest assist level",

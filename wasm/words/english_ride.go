@@ -212,4 +212,15 @@ var englishRide = [keys]string{
 	BandLegs:   "legs",
 	BandEasing: "eases off from {0}",
 	BandKept:   "{0} kept back",
+
+	TourOneWay: "one way",
+	TourPauses: "{0}, with pauses of {1}",
+	AskCharge:  "{0} charged",
+
+	HeadOnWay:    "On the way",
+	AllLimits:    "All limits",
+	BrakeCaution: "caution from {0}",
+	GroupRolling: "wheels, gears and air",
+	GroupPlaces:  "where the masses sit",
+	GroupBrakes:  "brakes",
 }

@@ -13,7 +13,7 @@ var germanPage = [keys]string{
 	AskClimb:        "{0} mit {1} auf {2}, Anstieg: {3}. Wetter: {4}.",
 	AskRider:        "{0}, {1}, tritt {2}",
 	AskLoad:         "{0}, {1}",
-	AskDay:          "{0}, {1}",
+	AskDay:          "{0}, {1}, {2}",
 	AskLevel:        "Unterstützungsstufe {0}",
 	AskLevelOff:     "Motor aus",
 	AskLevelHighest: "höchste Unterstützungsstufe",

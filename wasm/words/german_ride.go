@@ -212,4 +212,15 @@ var germanRide = [keys]string{
 	BandLegs:   "Beine",
 	BandEasing: "nimmt sich ab {0} zurück",
 	BandKept:   "{0} Rückhalt",
+
+	TourOneWay: "nur hin",
+	TourPauses: "{0}, mit je {1} Pause",
+	AskCharge:  "{0} geladen",
+
+	HeadOnWay:    "Auf der Fahrt",
+	AllLimits:    "Alle Grenzen",
+	BrakeCaution: "Vorsicht ab {0}",
+	GroupRolling: "Räder, Gänge und Luft",
+	GroupPlaces:  "wo die Massen sitzen",
+	GroupBrakes:  "Bremsen",
 }

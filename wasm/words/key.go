@@ -14,7 +14,7 @@ const (
 	VerdictShortMeans
 
 	// The sentence with blanks. AskClimb: rider, load, bike, hill, day. AskRider:
-	// name, mass, power. AskLoad: name, mass. AskDay: name, temperature. AskRide:
+	// name, mass, power. AskLoad: name, mass. AskDay: name, temperature, ground. AskRide:
 	// assist level, speed at the foot, law.
 	AskClimb
 	AskRider

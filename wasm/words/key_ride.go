@@ -245,5 +245,20 @@ const (
 	BandEasing
 	BandKept
 
+	// The round trip and the charge in the sentence of what is asked. TourPauses:
+	// what was said so far, the pause. AskCharge: the charge.
+	TourOneWay
+	TourPauses
+	AskCharge
+
+	// Headings: of the answer's parts, of the groups of a bike's inputs.
+	// BrakeCaution: temperature.
+	HeadOnWay
+	AllLimits
+	BrakeCaution
+	GroupRolling
+	GroupPlaces
+	GroupBrakes
+
 	keys // how many there are
 )

@@ -98,6 +98,31 @@ func (v Voice) LegsLine(r *rig.Rig, a *ride.Answer) string {
 	return v.Say(k, wanted, held, v.Percent(a.ReserveLeftJ/r.Rider.ReserveJ))
 }
 
+// Tour names how often a hill is ridden and whether there and back, with the
+// pauses, as a part of the sentence of what is asked.
+func (v Voice) Tour(q *ask.Question) string {
+	o := &q.Ride
+	text := v.tour(o)
+	if o.PauseS > 0 && (o.Back || o.Trips > 1) {
+		return v.Say(TourPauses, text, v.Duration(o.PauseS))
+	}
+	return text
+}
+
+func (v Voice) tour(o *ask.Ride) string {
+	text := v.text(TourBack)
+	switch {
+	case !o.Back && o.Trips <= 1:
+		return v.text(TourOneWay)
+	case !o.Back:
+		text = v.text(TourOne)
+	}
+	if o.Trips > 1 {
+		return v.Say(TourTimes, text, v.Number(o.Trips, 0))
+	}
+	return text
+}
+
 // TourLine says what a round trip is and how long it takes with its pauses; ""
 // for a hill ridden once, and where it stalls.
 func (v Voice) TourLine(q *ask.Question, a *ride.Answer) string {
@@ -105,28 +130,27 @@ func (v Voice) TourLine(q *ask.Question, a *ride.Answer) string {
 	if !o.Back && o.Trips <= 1 || a.Stalled {
 		return ""
 	}
-	text := v.text(TourOne)
-	if o.Back {
-		text = v.text(TourBack)
-	}
-	if o.Trips > 1 {
-		text = v.Say(TourTimes, text, v.Number(float64(o.Trips), 0))
-	}
+	text := v.tour(o)
 	if o.PauseS > 0 {
 		return capital(v.Say(TourPause, text, v.Duration(a.TourS), v.Duration(o.PauseS)))
 	}
 	return capital(v.Say(TourAll, text, v.Duration(a.TourS)))
 }
 
-// DownLine says what holds for the way down: the speed not to exceed and why,
-// the stop from the chosen speed [m/s] and what bounds it, and the brakes'
-// temperatures.
+// DownLine says what holds for the way down, as DownLines.
 func (v Voice) DownLine(r *rig.Rig, d *ride.WayDown, downMps float64) string {
+	return strings.Join(v.DownLines(r, d, downMps), " ")
+}
+
+// DownLines say what holds for the way down: the speed not to exceed and why,
+// the stop from the chosen speed [m/s] and what bounds it, and the brakes'
+// temperatures; the first alone where nothing falls or stops.
+func (v Voice) DownLines(r *rig.Rig, d *ride.WayDown, downMps float64) []string {
 	switch {
 	case !d.Falls:
-		return v.text(DownNone)
+		return []string{v.text(DownNone)}
 	case neverStops(d):
-		return v.Say(DownNever, v.Grade(d.SteepestGrade))
+		return []string{v.Say(DownNever, v.Grade(d.SteepestGrade))}
 	}
 	lines := []string{v.downMost(d)}
 	if math.IsInf(d.StoppingM, 1) {
@@ -135,7 +159,7 @@ func (v Voice) DownLine(r *rig.Rig, d *ride.WayDown, downMps float64) string {
 		lines = append(lines, v.Say(DownStops, v.Speed(downMps), v.Length(d.StoppingM), v.Grade(d.SteepestGrade), v.text(stopTexts[d.StopBy])))
 	}
 	front, rear := v.Temperature(unit.Celsius(d.FrontPeakC)), v.Temperature(unit.Celsius(d.RearPeakC))
-	return strings.Join(append(lines, v.Say(DownBrakes, front, rear)), " ")
+	return append(lines, v.Say(DownBrakes, front, rear))
 }
 
 // neverStops tells that even cold brakes do not stop it on the steepest fall.
