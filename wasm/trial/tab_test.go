@@ -155,9 +155,13 @@ func (p *tab) until(what, script string, args ...any) {
 	p.t.Helper()
 	ctx, cancel := context.WithTimeout(p.ctx, patience)
 	defer cancel()
-	_, err := chromedp.Run(ctx, chromedp.Evaluate[bool](withArgs(`new Promise(done => {
+	wait := chromedp.Evaluate[bool](withArgs(`new Promise(done => {
 		const look = () => { let yes = false; try { yes = (`+script+`) } catch { /* not there yet */ }
-			yes ? done(true) : requestAnimationFrame(look) }; look() })`, args), chromedp.EvalAwaitPromise))
+			yes ? done(true) : requestAnimationFrame(look) }; look() })`, args), chromedp.EvalAwaitPromise)
+	_, err := chromedp.Run(ctx, wait)
+	for err != nil && ctx.Err() == nil && strings.Contains(err.Error(), "navigated") { // to the page that is waited for
+		_, err = chromedp.Run(ctx, wait)
+	}
 	if err != nil {
 		last, end := context.WithTimeout(context.WithoutCancel(p.ctx), 2*time.Second)
 		defer end()
