@@ -91,18 +91,13 @@ func (v *viewer) notes() Parts {
 	return out
 }
 
-// cautions are what must be known before riding, and what was mended in the
-// track.
+// cautions are what must always be known before riding, and what was mended in
+// the track.
 func (v *viewer) cautions() *Node {
 	list := Parts{Class("cautions-list")}
 	for _, n := range v.Reading.Notes {
 		if v.IsOwn(state.Hill, v.Chosen[state.Hill]) {
 			list = append(list, El("li", Text(v.Note(n))))
-		}
-	}
-	if v.Answer != nil {
-		for _, text := range v.Cautions(v.Rig, &v.Answer.WayDown, v.Question.Ride.DownMps) {
-			list = append(list, El("li", Text(text)))
 		}
 	}
 	for _, k := range []words.Key{words.CautionEstimate, words.CautionDescent, words.CautionGrip, words.CautionLoad, words.CautionPractice, words.CautionLaw} {

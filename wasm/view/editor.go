@@ -5,33 +5,16 @@ import (
 
 	"hillwright/physics/ask"
 	. "hillwright/wasm/dom"
-	"hillwright/wasm/keep"
 	"hillwright/wasm/state"
 	"hillwright/wasm/words"
 )
 
-// inputs lists everything that goes into a kind; a touched row opens its
-// editor in place.
-func (v *viewer) inputs(kind keep.Kind) *Node {
-	rows := Parts{Class("inputs")}
-	for _, in := range state.Inputs(kind) {
-		name, _ := v.Input(in.Path)
-		open := v.Path == in.Path
-		rows = append(rows, El("li",
-			button("input-row", state.ShowPath, in.Path, flag("aria-expanded", open),
-				El("span", Class("input-name"), Text(capital(name))),
-				El("span", Class("input-value"), Text(v.valueOf(in.Path))),
-				v.sourceMark(in.Path)),
-			If(open, v.editor(in.Path))))
-	}
-	return El("ul", rows)
-}
-
-// sourceMark tells by a mark and a word where a value came from, and whether
-// it was changed.
-func (v *viewer) sourceMark(path string) *Node {
-	source := v.Question.SourceOf(path)
+// sourceMark tells by a mark and a word where a value came from, what stands
+// for it when it is not given, and whether it was changed.
+func (v *viewer) sourceMark(path, instead string) *Node {
+	source := v.Behind(path).Source
 	return El("span", Class("source"), sourceShape(source), Text(v.Source(source)),
+		If(instead != "", Text(" · "+instead)),
 		If(v.Changed(path), Parts{Text(" · "), v.say(words.KeptChanged)}))
 }
 
@@ -119,13 +102,18 @@ func (v *viewer) problem(path string) *Node {
 	return El("p", ID("problem-"+path), Class("problem"), With("role", "alert"), text)
 }
 
-// band tells how far a number may be off.
-func (v *viewer) band(path string) *Node {
-	low, high, ok := v.Question.Band(path)
-	if !ok || low == high {
-		return nil
+// band tells how far a number may be off, and why a class default stands in for
+// one that is not given.
+func (v *viewer) band(path string) Parts {
+	shown := v.Behind(path)
+	var out Parts
+	if low, high := shown.Low, shown.High; low < high {
+		out = append(out, El("p", Class("band"), v.say(words.NoteBand, v.Entry(path, low), v.Value(path, high))))
 	}
-	return El("p", Class("band"), v.say(words.NoteBand, v.Entry(path, low), v.Value(path, high)))
+	if shown.Reason != "" {
+		out = append(out, El("p", Class("band"), Text(v.Reason(shown.Reason))))
+	}
+	return out
 }
 
 // blank lets an input be not given, where that has a meaning.

@@ -28,7 +28,7 @@ func Page(s *state.State) *Node {
 		El("main",
 			El("div", Class("asks"), v.sentence(), v.place(), v.answer()),
 			El("div", Class("pictures"), v.section(), v.balance(), v.pull()),
-			El("div", Class("notes"), v.figures(), v.cautions()),
+			El("div", Class("notes"), v.onWay(), v.wayDown(), v.figures(), v.cautions()),
 		),
 		v.dropping(),
 		v.message(),

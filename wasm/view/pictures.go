@@ -2,6 +2,7 @@ package view
 
 import (
 	"math"
+	"strconv"
 
 	. "hillwright/wasm/dom"
 	"hillwright/wasm/draw"
@@ -16,33 +17,39 @@ func (v *viewer) section() *Node {
 	}
 	size := v.SectionSize()
 	picture := draw.Section(v.Profile, v.Answer, size, v.Voice)
-	reading := v.say(words.SectionHelp)
+	kept := v.Question.Ride.ChargeKept
+	strip := draw.Strip(v.Profile, v.Answer, v.Rig, kept, size, v.Voice)
+	reading := Parts{v.say(words.SectionHelp)}
 	if !math.IsNaN(v.StaffM) {
 		at := draw.SectionAtDistance(v.Profile, v.Answer, size, v.StaffM)
-		putStaff(picture, at)
-		reading = Text(capital(draw.StaffText(at, v.Rig, v.Voice)))
+		put(picture, "staff", at.Transform())
+		put(strip, "plumb", at.PlumbTransform())
+		reading = Parts{Text(capital(draw.StaffText(at, v.Rig, v.Voice))),
+			El("span", Class("staff-state"), Text(draw.StateText(at, v.Answer, v.Rig, v.Voice)))}
 	}
 	return region("section", "section", Class("picture-part"), With("aria-labelledby", "section-head"),
 		El("h2", ID("section-head"), v.say(words.SectionTitle)),
 		// Beside the picture, not on it: a thumb that moves the staff would lie on it.
 		region("p", "staff-reading", Class("staff-reading"), With("role", "status"), reading),
 		region("div", "section-picture", Class("canvas"), picture),
+		region("div", "strip-picture", Class("canvas bands-"+strconv.Itoa(draw.StripBands(v.Answer, v.Rig))), strip),
 		El("div", Class("row spread"),
 			button("step small", state.StaffStep, "-", With("aria-label", v.Voice.Say(words.StaffBack)), Text("‹")),
 			v.swatches(),
 			button("step small", state.StaffStep, "+", With("aria-label", v.Voice.Say(words.StaffOn)), Text("›"))),
-		v.table(words.SectionTitle, func() *Node { return draw.SectionText(v.Profile, v.Answer, v.Rig, v.Voice) }),
+		v.table(words.SameInFigures, words.SectionTitle,
+			draw.SectionText(v.Profile, v.Answer, v.Rig, v.Voice), draw.StripText(v.Profile, v.Answer, v.Rig, kept, v.Voice)),
 	)
 }
 
-// putStaff stands the picture's staff at a place and makes it a region, so that
-// it alone changes while a finger moves it.
-func putStaff(picture *Node, at draw.Staff) {
+// put moves the part of a picture with a class to a place and makes it a
+// region, so that it alone changes while a finger moves it.
+func put(picture *Node, part, transform string) {
 	picture.Walk(func(n *Node) {
-		if class, _ := n.Attr("class"); class != "staff" {
+		if class, _ := n.Attr("class"); class != part {
 			return
 		}
-		kept := []Attr{{Name: "data-region", Value: "staff"}, {Name: "transform", Value: at.Transform()}}
+		kept := []Attr{{Name: "data-region", Value: part}, {Name: "transform", Value: transform}}
 		for _, a := range n.Attrs {
 			if a.Name != "visibility" && a.Name != "transform" {
 				kept = append(kept, a)
@@ -53,9 +60,12 @@ func putStaff(picture *Node, at draw.Staff) {
 }
 
 // table is a picture's figures as text, on demand.
-func (v *viewer) table(title words.Key, make func() *Node) *Node {
-	return El("details", Class("in-figures"), El("summary", v.say(words.SameInFigures)),
-		El("div", Class("table-room"), With("role", "group"), With("tabindex", "0"), With("aria-label", v.Voice.Say(title)), make()))
+func (v *viewer) table(opener, title words.Key, tables ...*Node) *Node {
+	room := Parts{Class("table-room"), With("role", "group"), With("tabindex", "0"), With("aria-label", v.Voice.Say(title))}
+	for _, t := range tables {
+		room = append(room, t)
+	}
+	return El("details", Class("in-figures"), El("summary", v.say(opener)), El("div", room))
 }
 
 // balance is the wanted pull against every limit's peg.
@@ -73,7 +83,7 @@ func (v *viewer) balance() *Node {
 		region("p", "balance-reading", Class("staff-reading"), With("role", "status"), reading),
 		region("div", "balance-picture", Class("canvas"), draw.Balance(b, v.BalanceSize(), v.Voice, draw.BalanceOptions{WantedN: v.WeightN})),
 		El("div", Class("row"), If(!math.IsNaN(v.WeightN), button("plain", state.WeightBack, "", v.say(words.WeightBackToHill)))),
-		v.table(words.BalanceTitle, func() *Node { return draw.BalanceText(b, v.Voice) }),
+		v.table(words.AllLimits, words.BalanceTitle, draw.BalanceText(b, v.Voice)),
 	)
 }
 
@@ -90,6 +100,6 @@ func (v *viewer) pull() *Node {
 	return region("section", "pull", Class("picture-part"), opener,
 		El("p", Class("staff-reading"), v.say(words.PullHelp)),
 		El("div", Class("canvas"), draw.PullDiagram(v.Rig, grade, running, v.PullSize(), v.Voice)),
-		v.table(words.PullTitle, func() *Node { return draw.PullText(v.Rig, grade, running, v.Voice) }),
+		v.table(words.SameInFigures, words.PullTitle, draw.PullText(v.Rig, grade, running, v.Voice)),
 	)
 }

@@ -23,6 +23,8 @@ func (v *viewer) place() *Node {
 		title, inside = words.HeadKept, v.kept()
 	case state.PlaceSettings:
 		title, inside = words.HeadSettings, v.settings()
+	case state.PlaceTour:
+		title, inside = words.LabelTour, v.tour()
 	case string(state.Hill):
 		title, inside = words.HeadHill, v.hills()
 	default:

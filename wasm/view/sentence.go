@@ -68,14 +68,20 @@ func (v *viewer) load() Part {
 }
 
 func (v *viewer) day() Part {
-	return v.fill(words.AskDay, v.thing(keep.Day, nil), v.input("day.temperature_c"))
+	return v.fill(words.AskDay, v.thing(keep.Day, nil), v.input("day.temperature_c"), v.input("day.ground"))
 }
 
-// ride is the short end of the sentence: what else is asked of the ride opens
-// with the assist level.
+// ride is the end of the sentence: what else is asked of the ride opens with
+// the assist level; then how often, and the charge where it is not full.
 func (v *viewer) ride() Part {
-	return Parts{El("button", With("type", "button"), Class("blank"), ID("blank-"+string(state.Ride)), Act(state.Open, string(state.Ride)),
-		flag("aria-expanded", v.Place == string(state.Ride)), With("aria-controls", "place"), Text(capital(v.level()))), Text(".")}
+	open := v.Place == string(state.Ride) && (v.Path == "" || v.All)
+	out := Parts{El("button", With("type", "button"), Class("blank"), ID("blank-"+string(state.Ride)), Act(state.Open, string(state.Ride)),
+		flag("aria-expanded", open), With("aria-controls", "place"), Text(capital(v.level()))), Text(", "), v.tourWord()}
+	const charge = "ride.charge"
+	if v.Question.Ride.Charge < 1 || v.Path == charge && !v.All {
+		out = append(out, Text(", "), v.inputAs(charge, v.Voice.Say(words.AskCharge, v.valueOf(charge))))
+	}
+	return append(out, Text("."))
 }
 
 func (v *viewer) level() string {
@@ -92,22 +98,32 @@ func (v *viewer) level() string {
 // valueOf writes an input's value with its unit, or the word for what stands
 // in its place.
 func (v *viewer) valueOf(path string) string {
+	value, instead := v.valueAndWord(path)
+	if instead != "" {
+		return value + " (" + instead + ")"
+	}
+	return value
+}
+
+// valueAndWord writes an input's value with its unit; where it is not given,
+// what is taken instead, and the word for that.
+func (v *viewer) valueAndWord(path string) (value, instead string) {
 	in, _ := ask.InputAt(path)
 	text, _ := v.Question.Get(path)
 	if in.Form != ask.Number {
 		if path == "ride.level" {
-			return v.level()
+			return v.level(), ""
 		}
-		return v.Choice(path, text)
+		return v.Choice(path, text), ""
 	}
 	if number, ok := v.Question.Value(path); ok {
-		return v.Value(path, number)
+		return v.Value(path, number), ""
 	}
 	word := v.Choice(path, in.Blank)
-	if number, _ := v.NumberOf(path); number != 0 && !math.IsNaN(number) {
-		return v.Value(path, number) + " (" + word + ")"
+	if shown := v.Behind(path); !math.IsNaN(shown.Value) {
+		return v.Value(path, shown.Value), word
 	}
-	return word
+	return word, ""
 }
 
 // headOf is the heading of a kind.

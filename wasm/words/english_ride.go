@@ -223,4 +223,7 @@ var englishRide = [keys]string{
 	GroupRolling: "wheels, gears and air",
 	GroupPlaces:  "where the masses sit",
 	GroupBrakes:  "brakes",
+
+	OnGround:       "Ground: {0}",
+	TourTimesShort: "{0} times there and back",
 }

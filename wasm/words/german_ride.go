@@ -223,4 +223,7 @@ var germanRide = [keys]string{
 	GroupRolling: "Räder, Gänge und Luft",
 	GroupPlaces:  "wo die Massen sitzen",
 	GroupBrakes:  "Bremsen",
+
+	OnGround:       "Untergrund: {0}",
+	TourTimesShort: "{0}-mal hin und zurück",
 }

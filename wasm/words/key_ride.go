@@ -260,5 +260,9 @@ const (
 	GroupPlaces
 	GroupBrakes
 
+	// OnGround: ground. TourTimesShort: how often.
+	OnGround
+	TourTimesShort
+
 	keys // how many there are
 )
