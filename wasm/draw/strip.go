@@ -90,11 +90,13 @@ func Strip(p *hill.Profile, a *ride.Answer, r *rig.Rig, kept float64, size Size,
 		return nil
 	}
 	size.H = float64(len(s.bands)) * bandPitch
-	var parts dom.Parts
+	var parts, labels dom.Parts
 	for i := range s.bands {
-		parts = append(parts, s.draw(&s.bands[i], float64(i)*bandPitch))
+		top := float64(i) * bandPitch
+		parts = append(parts, s.draw(&s.bands[i], top))
+		labels = append(labels, s.labels(&s.bands[i], top+12))
 	}
-	return picture("img", "strip", StripTitle(a, v), s.summary(), size, parts, plumb(size.H),
+	return picture("img", "strip", StripTitle(a, v), s.summary(), size, parts, plumb(size.H), labels,
 		dom.El("rect", dom.Class("touch"), dom.Act("move-staff", ""),
 			dom.With("x", "0"), dom.With("y", "0"), dom.With("width", num(size.W)), dom.With("height", num(size.H))))
 }
@@ -149,14 +151,14 @@ func (s *strip) draw(b *band, top float64) dom.Parts {
 	return dom.Parts{
 		beyond.node("ground-beyond"), hatched.node("band-bad", dom.With("fill", "url(#hatch-close)")),
 		frame.node("band-frame"), mark.node("band-mark"),
-		dom.If(len(hatched.d) > 0, line.node("band-halo")), line.node("band-line"), s.labels(b, top+12),
+		dom.If(len(hatched.d) > 0, line.node("band-halo")), line.node("band-line"),
 	}
 }
 
 // labels are the band's name at its left and the value at its end at its right.
 func (s *strip) labels(b *band, y float64) dom.Parts {
-	value := label{lines: []string{b.write(b.of[len(b.of)-1])}, x: s.size.W - sectionSide, y: y, px: smallPx, anchor: fromEnd, class: "figure"}
-	name := label{lines: []string{b.name}, x: sectionSide, y: y, px: smallPx, class: "words"}
+	value := label{lines: []string{b.write(b.of[len(b.of)-1])}, x: s.size.W - sectionSide, y: y, px: smallPx, anchor: fromEnd, class: "figure halo"}
+	name := label{lines: []string{b.name}, x: sectionSide, y: y, px: smallPx, class: "words halo"}
 	if b.marked && b.markText != "" {
 		long := name
 		long.lines = []string{b.name + " · " + b.markText}

@@ -76,7 +76,7 @@ func (v *viewer) day() Part {
 func (v *viewer) ride() Part {
 	open := v.Place == string(state.Ride) && (v.Path == "" || v.All)
 	out := Parts{El("button", With("type", "button"), Class("blank"), ID("blank-"+string(state.Ride)), Act(state.Open, string(state.Ride)),
-		flag("aria-expanded", open), With("aria-controls", "place"), Text(capital(v.level()))), Text(", "), v.tourWord()}
+		flag("aria-expanded", open), With("aria-controls", "place"), Text(capital(v.level()))), Text(", "), v.tourWords()}
 	const charge = "ride.charge"
 	if v.Question.Ride.Charge < 1 || v.Path == charge && !v.All {
 		out = append(out, Text(", "), v.inputAs(charge, v.Voice.Say(words.AskCharge, v.valueOf(charge))))

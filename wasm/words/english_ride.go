@@ -214,7 +214,7 @@ var englishRide = [keys]string{
 	BandKept:   "{0} kept back",
 
 	TourOneWay: "one way",
-	TourPauses: "{0}, with pauses of {1}",
+	AskPauses:  "{0}, with pauses of {1}",
 	AskCharge:  "{0} charged",
 
 	HeadOnWay:    "On the way",
@@ -224,6 +224,6 @@ var englishRide = [keys]string{
 	GroupPlaces:  "where the masses sit",
 	GroupBrakes:  "brakes",
 
-	OnGround:       "Ground: {0}",
-	TourTimesShort: "{0} times there and back",
+	OnGround:      "Ground: {0}",
+	TourTimesBack: "{0} times",
 }

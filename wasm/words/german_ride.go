@@ -91,7 +91,7 @@ var germanRide = [keys]string{
 	StripCharge:      "Ladung",
 	StripLegs:        "Kraft des Fahrers",
 	LabelStart:       "Anfahren",
-	LabelTour:        "Rundfahrt",
+	LabelTour:        "Hin und zurück",
 	LabelTourTime:    "Zeit für alles",
 	LabelEasing:      "bis der Motor sich zurücknimmt",
 	LabelNever:       "nie",
@@ -214,7 +214,7 @@ var germanRide = [keys]string{
 	BandKept:   "{0} Rückhalt",
 
 	TourOneWay: "nur hin",
-	TourPauses: "{0}, mit je {1} Pause",
+	AskPauses:  "{0}, mit je {1} Pause",
 	AskCharge:  "{0} geladen",
 
 	HeadOnWay:    "Auf der Fahrt",
@@ -224,6 +224,6 @@ var germanRide = [keys]string{
 	GroupPlaces:  "wo die Massen sitzen",
 	GroupBrakes:  "Bremsen",
 
-	OnGround:       "Untergrund: {0}",
-	TourTimesShort: "{0}-mal hin und zurück",
+	OnGround:      "Untergrund: {0}",
+	TourTimesBack: "{0}-mal",
 }

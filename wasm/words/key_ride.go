@@ -245,10 +245,10 @@ const (
 	BandEasing
 	BandKept
 
-	// The round trip and the charge in the sentence of what is asked. TourPauses:
+	// The round trip and the charge in the sentence of what is asked. AskPauses:
 	// what was said so far, the pause. AskCharge: the charge.
 	TourOneWay
-	TourPauses
+	AskPauses
 	AskCharge
 
 	// Headings: of the answer's parts, of the groups of a bike's inputs.
@@ -260,9 +260,9 @@ const (
 	GroupPlaces
 	GroupBrakes
 
-	// OnGround: ground. TourTimesShort: how often.
+	// OnGround: ground. TourTimesBack: how often.
 	OnGround
-	TourTimesShort
+	TourTimesBack
 
 	keys // how many there are
 )

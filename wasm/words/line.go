@@ -98,19 +98,10 @@ func (v Voice) LegsLine(r *rig.Rig, a *ride.Answer) string {
 	return v.Say(k, wanted, held, v.Percent(a.ReserveLeftJ/r.Rider.ReserveJ))
 }
 
-// Tour names how often a hill is ridden and whether there and back, with the
-// pauses, as a part of the sentence of what is asked.
+// Tour names how often a hill is ridden and whether there and back, as a part
+// of a sentence.
 func (v Voice) Tour(q *ask.Question) string {
-	o := &q.Ride
-	text := v.tour(o)
-	if o.PauseS > 0 && (o.Back || o.Trips > 1) {
-		return v.Say(TourPauses, text, v.Duration(o.PauseS))
-	}
-	return text
-}
-
-func (v Voice) tour(o *ask.Ride) string {
-	text := v.text(TourBack)
+	o, text := &q.Ride, v.text(TourBack)
 	switch {
 	case !o.Back && o.Trips <= 1:
 		return v.text(TourOneWay)
@@ -130,7 +121,7 @@ func (v Voice) TourLine(q *ask.Question, a *ride.Answer) string {
 	if !o.Back && o.Trips <= 1 || a.Stalled {
 		return ""
 	}
-	text := v.tour(o)
+	text := v.Tour(q)
 	if o.PauseS > 0 {
 		return capital(v.Say(TourPause, text, v.Duration(a.TourS), v.Duration(o.PauseS)))
 	}
