@@ -91,8 +91,9 @@ func joined(records js.Value) []byte {
 		one, _ := keep.Decode([]byte(records.Index(i).String()))
 		all.Things = append(all.Things, one.Things...)
 		all.Hills = append(all.Hills, one.Hills...)
+		all.Readings = append(all.Readings, one.Readings...)
 	}
-	if len(all.Things)+len(all.Hills) == 0 {
+	if len(all.Things)+len(all.Hills)+len(all.Readings) == 0 {
 		return nil
 	}
 	return keep.Encode(all)

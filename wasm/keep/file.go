@@ -7,8 +7,9 @@ import (
 
 // Things is what a person has saved: bikes, riders, loads and days, and hills.
 type Things struct {
-	Things []Thing
-	Hills  []Hill
+	Things   []Thing
+	Hills    []Hill
+	Readings []Reading
 }
 
 // The file of saved things is JSON:
@@ -17,8 +18,12 @@ type Things struct {
 //	 "things":[{"kind":"bike","id":"…","names":{"":"…"},"values":{"mass_kg":"24"},
 //	            "sources":{"mass_kg":"measured"},"changed":1790000000}],
 //	 "hills":[{"id":"…","names":{"":"…"},"edge_m":[0,400],"height_m":[0,28],
-//	           "bearing_deg":[90],"height_known":false,"sections":"400 m at 7 %","changed":1790000000}]}
+//	           "bearing_deg":[90],"height_known":false,"sections":"400 m at 7 %","changed":1790000000}],
+//	 "readings":[{"id":"…","place":"…","note":"…","method":"tilt-turned","grade":0.12,"error":0.002,
+//	              "time_s":1790000000,"pitch_m":60,"lat_deg":44.1,"lon_deg":8.2,"changed":1790000000}]}
 //
+// Grades and errors (1 σ) are plain fractions. Readings are absent where there
+// are none, and in files from before there were any.
 // Version rises when an older reader would misread a newer file.
 const (
 	fileFormat  = "hillwright-things"
@@ -43,6 +48,15 @@ func Encode(t Things) []byte {
 			out = append(out, ',')
 		}
 		out = putHill(append(out, '\n'), &t.Hills[i])
+	}
+	if len(t.Readings) > 0 {
+		out = append(out, `],"readings":[`...)
+		for i := range t.Readings {
+			if i > 0 {
+				out = append(out, ',')
+			}
+			out = putReading(append(out, '\n'), &t.Readings[i])
+		}
 	}
 	return append(out, "]}\n"...)
 }
@@ -118,6 +132,7 @@ func Decode(data []byte) (Things, []Fault) {
 	var out Things
 	out.Things = r.things(file["things"])
 	out.Hills = r.hills(file["hills"])
+	out.Readings = r.readings(file["readings"])
 	return out, r.faults
 }
 

@@ -12,8 +12,9 @@ type Merged struct{ Added, Replaced, Same, Older int }
 // result shares nothing that is written to.
 func Merge(have, from Things) (Things, Merged) {
 	out := Things{
-		Things: append([]Thing(nil), have.Things...),
-		Hills:  append([]Hill(nil), have.Hills...),
+		Things:   append([]Thing(nil), have.Things...),
+		Hills:    append([]Hill(nil), have.Hills...),
+		Readings: append([]Reading(nil), have.Readings...),
 	}
 	var did Merged
 	for i := range from.Things {
@@ -38,6 +39,18 @@ func Merge(have, from Things) (Things, Merged) {
 		}
 		if did.count(h.Changed, out.Hills[at].Changed, string(putHill(nil, h)) == string(putHill(nil, &out.Hills[at]))) {
 			out.Hills[at] = *h
+		}
+	}
+	for i := range from.Readings {
+		r := &from.Readings[i]
+		at := out.ReadingAt(r.ID)
+		if at < 0 {
+			out.Readings = append(out.Readings, *r)
+			did.Added++
+			continue
+		}
+		if did.count(r.Changed, out.Readings[at].Changed, string(putReading(nil, r)) == string(putReading(nil, &out.Readings[at]))) {
+			out.Readings[at] = *r
 		}
 	}
 	return out, did

@@ -3,12 +3,14 @@ package keep
 // Settings is how a person left the page, so that a reload finds it again:
 // what they like (Lang, Units, Mark, Theme, each empty when the device
 // decides), what is chosen by kind ("bike", "hill"), the inputs that were
-// changed since, with their sources, by whole path, and the sections as typed.
+// changed since, with their sources, by whole path, the sections as typed, and
+// how the hillside was left (package state says what by which name).
 type Settings struct {
 	Lang, Units, Mark, Theme string
 	Sections                 string
 	Chosen                   map[string]string
 	Values, Sources          map[string]string
+	Hillside                 map[string]string
 }
 
 // EncodeSettings writes settings as the JSON that DecodeSettings reads.
@@ -17,6 +19,7 @@ func EncodeSettings(s Settings) []byte {
 		{"lang", s.Lang, nil}, {"units", s.Units, nil}, {"mark", s.Mark, nil}, {"theme", s.Theme, nil},
 		{"sections", s.Sections, nil},
 		{"chosen", "", s.Chosen}, {"values", "", s.Values}, {"sources", "", s.Sources},
+		{"hillside", "", s.Hillside},
 	}), '\n')
 }
 
@@ -52,5 +55,6 @@ func DecodeSettings(data []byte) (s Settings, ok bool) {
 	return Settings{
 		Lang: text(m["lang"]), Units: text(m["units"]), Mark: text(m["mark"]), Sections: text(m["sections"]), Theme: text(m["theme"]),
 		Chosen: texts(m["chosen"]), Values: texts(m["values"]), Sources: texts(m["sources"]),
+		Hillside: texts(m["hillside"]),
 	}, true
 }

@@ -59,6 +59,17 @@ func changedRecords(prev, next keep.Things) []Effect {
 			out = append(out, put(string(Hill)+":"+h.ID, keep.Things{Hills: next.Hills[i : i+1]}))
 		}
 	}
+	for i := range next.Readings {
+		r := &next.Readings[i]
+		if at := prev.ReadingAt(r.ID); at < 0 || !sameRecord(keep.Things{Readings: prev.Readings[at : at+1]}, keep.Things{Readings: next.Readings[i : i+1]}) {
+			out = append(out, put("reading:"+r.ID, keep.Things{Readings: next.Readings[i : i+1]}))
+		}
+	}
+	for _, r := range prev.Readings {
+		if next.ReadingAt(r.ID) < 0 {
+			out = append(out, Effect{Kind: DropThing, Key: "reading:" + r.ID})
+		}
+	}
 	for _, t := range prev.Things {
 		if next.At(t.Kind, t.ID) < 0 {
 			out = append(out, Effect{Kind: DropThing, Key: string(t.Kind) + ":" + t.ID})
