@@ -59,3 +59,7 @@ func (l *short) lengthM() float64 {
 	c := math.Sqrt(1 + wgs84Prime)
 	return wgs84A * c * 2 * math.Asin(min(1, math.Sqrt(l.e*l.e+l.f*l.f))) / (l.b * l.b)
 }
+
+// Apart gives how far two points lie apart on the WGS84 ellipsoid [m], whatever
+// their heights; to 1 mm up to 100 km.
+func Apart(a, b Point) float64 { return leg(&a, &b) }
