@@ -151,11 +151,16 @@ func TestBikeInputsInGroups(t *testing.T) {
 	page.Walk(func(n *dom.Node) {
 		if attr(n, "class") == "group" {
 			groups++
+			inside := 0
 			n.Walk(func(k *dom.Node) {
 				if attr(k, "class") == "input-row" {
 					folded[attr(k, "data-arg")]++
+					inside++
 				}
 			})
+			if inside < 3 {
+				t.Errorf("group %d has %d inputs", groups, inside)
+			}
 		}
 	})
 	if groups != 5 {
