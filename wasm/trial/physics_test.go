@@ -72,7 +72,8 @@ func inBrowser(t testing.TB, name string, flags ...string) (text string, code in
 	}
 	p := newTab(t, tablet, testHost(t, dir, filepath.Join(strings.TrimSpace(string(root)), "lib", "wasm", "wasm_exec.js")))
 	question := url.Values{"run": {"test.wasm"}, "in": {"/physics/" + name}, "flag": flags}
-	p.allow("404 (Not Found)") // files that the tests do not need, such as old findings of fuzzing
+	p.allow("404 (Not Found)")               // files that the tests do not need, such as old findings of fuzzing
+	p.allow("Go program has already exited") // a timer of the program's that was set before its end
 	p.do(chromedp.Navigate(p.host.URL + "?" + question.Encode()))
 	over, err := chromedp.Run(p.ctx, chromedp.Evaluate[bool](`new Promise(done => {
 		const look = () => ran.code !== null ? done(true) : setTimeout(look, 20); look() })`, chromedp.EvalAwaitPromise))
