@@ -22,10 +22,11 @@ pack: binary
 binary:
 	$(GO) build -trimpath -o bin/hillwright ./cmd/hillwright
 
-test: chromium testdata/node_modules/.package-lock.json
-	HILLWRIGHT_FULL=1 $(GO) test -timeout 30m ./physics/... ./build/... ./cmd/... ./site/...
+# The quick first, so that what is plainly wrong shows at once.
+test: check chromium testdata/node_modules/.package-lock.json
+	HILLWRIGHT_FULL=1 $(GO) test -timeout 15m ./physics/... ./build/... ./cmd/... ./site/...
 	$(GO) test $(NATIVE)
-	HILLWRIGHT_FULL=1 $(GO) test -count=1 -timeout 30m ./wasm/trial/...
+	HILLWRIGHT_FULL=1 $(GO) test -count=1 -timeout 15m ./wasm/trial/...
 
 check:
 	@wrong=$$(gofmt -l $(SOURCES)); if [ -n "$$wrong" ]; then echo "gofmt -w these:"; echo "$$wrong"; exit 1; fi
@@ -35,8 +36,10 @@ check:
 	bin/staticcheck ./...
 	GOOS=js GOARCH=wasm bin/staticcheck ./wasm/...
 
-bench:
+# The computation natively, then the page in the browser.
+bench: chromium
 	$(GO) test -run '^$$' -bench . -benchmem ./physics/... ./build/... $(NATIVE)
+	HILLWRIGHT_FULL=1 $(GO) test -run '^$$' -bench . -benchtime 5x -timeout 30m ./wasm/trial/...
 
 # Every fuzz test in turn, FUZZTIME each.
 fuzz:

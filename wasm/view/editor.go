@@ -73,21 +73,23 @@ func (v *viewer) raw(path, value string) string {
 func (v *viewer) stepper(in ask.Input, name string) *Node {
 	_, unit := v.Input(in.Path)
 	number, given := v.NumberOf(in.Path)
-	value := ""
+	value, instead := "", ""
 	if given {
 		value = v.Entry(in.Path, number)
+	} else if number != 0 {
+		instead = v.Entry(in.Path, number)
 	}
 	return El("div", Class("stepper"),
 		button("step", state.StepDown, in.Path, With("aria-label", v.Voice.Say(words.StepDown, name)), Text("−")),
-		El("div", Class("stepper-value"), v.field(in.Path, name, v.raw(in.Path, value), "decimal"), If(unit != "", El("span", Class("unit"), Text(unit)))),
+		El("div", Class("stepper-value"), v.field(in.Path, name, v.raw(in.Path, value), "decimal", If(instead != "", With("placeholder", instead))), If(unit != "", El("span", Class("unit"), Text(unit)))),
 		button("step", state.StepUp, in.Path, With("aria-label", v.Voice.Say(words.StepUp, name)), Text("+")),
 	)
 }
 
-func (v *viewer) field(path, name, value, mode string) *Node {
+func (v *viewer) field(path, name, value, mode string, more ...Part) *Node {
 	return El("input", ID("field-"+path), With("type", "text"), With("inputmode", mode), With("autocomplete", "off"), With("spellcheck", "false"),
 		With("aria-label", name), With("aria-describedby", "problem-"+path), flag("aria-invalid", v.wrong(path)),
-		With("value", value), Act(state.Type, path))
+		With("value", value), Act(state.Type, path), Parts(more))
 }
 
 func (v *viewer) wrong(path string) bool { return v.Typing.Path == path && v.Typing.Err != nil }
