@@ -56,13 +56,14 @@ type Reading struct {
 // Factors from a standard error to an interval of the normal distribution.
 const (
 	factor90 = 1.6448536269514722 // 90 % within
-	// ShownFactor makes the ± that is shown of a standard error: about 95 %
-	// within (JCGM 100:2008, the guide to uncertainty in measurement, 6.3.3).
-	ShownFactor = 2.0
+	// ShownFactor makes the ± that is shown of a standard error. 1.96 would hold
+	// 95 of 100 if the error itself were known; it is not, so a tenth is added
+	// (the guide to uncertainty in measurement, JCGM 100:2008, 6.3, has 2 to 3).
+	ShownFactor = 2.15
 )
 
 // PlusMinus is the error to show behind ±, as a grade: ShownFactor standard
-// errors, which cover the true grade in about 95 of 100 readings.
+// errors, which cover the true grade in 95 of 100 readings or more.
 func (r Reading) PlusMinus() float64 { return ShownFactor * r.Error }
 
 // Interval90 gives the grades between which the true one lies in 90 of 100

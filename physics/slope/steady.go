@@ -20,6 +20,12 @@ const (
 	gapS       = 2.0 // a longer silence begins anew [s]
 )
 
+// The error that is enough where nobody says, and the finest step of a sensor.
+const (
+	usualTarget = 0.1 * degree
+	finestStep  = 1e-9
+)
+
 // degree is one degree [rad].
 const degree = math.Pi / 180
 
@@ -70,13 +76,70 @@ type cell struct {
 // AccelerationStep.
 func NewSteady(target, step unit.Angle) *Steady {
 	if !(target > 0) {
-		target = 0.1 * degree
+		target = usualTarget
 	}
-	if !(step >= 0) {
-		step = OrientationStep
-	}
-	return &Steady{target: float64(target), step: float64(step)}
+	return &Steady{target: float64(target), step: max(float64(step), finestStep)}
 }
 
 // Average gives the state; it costs nothing.
 func (s *Steady) Average() Average { return s.now }
+
+// Add takes a sample: its time [s, rising] and angle [rad]. A sample that is
+// not a number is passed over; after a silence of two seconds, or when time
+// goes back, averaging begins anew. Angles from −π to π.
+func (s *Steady) Add(timeS float64, angle unit.Angle) {
+	if !finite(timeS) || !(math.Abs(float64(angle)) <= math.Pi) {
+		return
+	}
+	begun := s.open.count > 0 || len(s.cells) > 0
+	if begun && (timeS < s.lastS || timeS > s.lastS+gapS) {
+		s.cells, s.open = s.cells[:0], cell{}
+		s.now = Average{Moves: s.moves}
+	}
+	s.lastS = timeS
+	if s.open.count > 0 && timeS >= s.openEndS {
+		if len(s.cells) == mostCells {
+			copy(s.cells, s.cells[1:])
+			s.cells = s.cells[:mostCells-1]
+		}
+		s.cells = append(s.cells, s.open)
+		s.open = cell{}
+		s.refresh()
+	}
+	if s.open.count == 0 {
+		s.openEndS = timeS + cellS
+	}
+	s.open.add(timeS, float64(angle))
+}
+
+// add keeps mean and sum of squares (Welford 1962, Technometrics 4, 419).
+func (c *cell) add(timeS, v float64) {
+	c.count++
+	d := v - c.mean
+	c.mean += d / float64(c.count)
+	c.squares += d * (v - c.mean)
+	c.timeS += (timeS - c.timeS) / float64(c.count)
+}
+
+// refresh makes the average anew of the cells.
+func (s *Steady) refresh() {
+	w := &s.work
+	if s.moved() {
+		s.moves++
+		s.cells = append(s.cells[:0], s.cells[len(s.cells)-newestCells:]...)
+	}
+	s.now = Average{Moves: s.moves, Steadiness: steadiness(s.cells)}
+	bumps := w.keep(s.cells)
+	n := len(w.kept)
+	if n < 4 {
+		return
+	}
+	s.now.Bumps = bumps
+	s.now.Seconds = w.kept[n-1].timeS - w.kept[0].timeS + cellS
+	mean, err, drift, drifting := w.mean(s.step)
+	s.now.Mean, s.now.Error = unit.Angle(mean), unit.Angle(root(err, drift))
+	s.now.Drifting = drifting
+	wanted := s.target / float64(s.now.Error)
+	s.now.Progress = min(1, wanted*wanted, float64(n)/leastCells)
+	s.now.Enough = s.now.Progress >= 1 && !drifting
+}
