@@ -1,6 +1,15 @@
 package state
 
-import "hillwright/physics/hill"
+import (
+	"hillwright/physics/hill"
+	"hillwright/physics/slope"
+)
+
+// Places of the page that are gone to.
+const (
+	GoHillside = "hillside"
+	GoSentence = "sentence"
+)
 
 // Action is one thing that happens: a touch, a key, a file that arrives. Name
 // is one of the constants below; the rest is what it needs.
@@ -13,6 +22,9 @@ type Action struct {
 	Data []byte  // a file's content
 	Hill *hill.Profile
 	Err  error
+
+	Leans []Lean    // samples of the tilt sensor
+	Fix   slope.Fix // of the location sensor
 	// Now is when it happens, in seconds since 1970: the state has no clock.
 	Now int64
 }
@@ -33,35 +45,62 @@ const (
 	RoundTrip = "tour"      // Arg: how often there and back; 0: one way
 	Choose    = "choose"    // Arg: kind:id
 
-	TypeSections = "sections"     // Text: the whole field
-	Sketch       = "sketch"       // X, Y: where the finger is, in the sketch
-	SketchClear  = "sketch-clear" // begins again
-	SketchLong   = "sketch-long"  // Arg: how long the sketch is [m]
-	PickTrack    = "track-pick"   // asks for a file
-	StopTrack    = "track-stop"   // stops the reading
-	TypeName     = "name"         // Arg: kind, Text: the whole field
-	Keep         = "keep"         // Arg: kind: saves what is chosen, with its changes, under the typed name
-	Forget       = "forget"       // Arg: kind:id
-	Export       = "export"       // everything as a file
-	PickImport   = "import-pick"  // asks for a file
-	Figures      = "figures"      // the answer as a file of JSON
-	Share        = "share"        // hands the answer's sentences on
-	Print        = "print"        //
-	Undo         = "undo"         //
-	Dismiss      = "dismiss"      // takes the message away
-	Pull         = "pull"         // shows or hides the pull diagram
-	MoveStaff    = "move-staff"   // X: place in the section
-	StaffStep    = "staff-step"   // Arg: "+" or "-": a fiftieth of the hill
-	MoveWeight   = "drag-weight"  // X: place in the balance
-	WeightStep   = "weight-step"  // Arg: "+" or "-": a fiftieth of what is wanted
-	WeightBack   = "weight-back"  // the weight hangs again where the hill puts it
-	SetLanguage  = "language"     // Arg: tag
-	SetUnits     = "units"        // Arg: metric or imperial
-	SetMark      = "mark"         // Arg: point or comma
-	SetTheme     = "theme"        // Arg: sun, dusk, or device
-	UseNew       = "use-new"      // takes the new version
-	GoOn         = "go-on"        // after something broke
-	SaveBroken   = "broke-save"   // everything as a file, after something broke
+	TypeSections   = "sections"       // Text: the whole field
+	Sketch         = "sketch"         // X, Y: where the finger is, in the sketch
+	SketchClear    = "sketch-clear"   // begins again
+	SketchLong     = "sketch-long"    // Arg: how long the sketch is [m]
+	PickTrack      = "track-pick"     // asks for a file
+	StopTrack      = "track-stop"     // stops the reading
+	TypeName       = "name"           // Arg: kind, Text: the whole field
+	Keep           = "keep"           // Arg: kind: saves what is chosen, with its changes, under the typed name
+	Forget         = "forget"         // Arg: kind:id
+	Export         = "export"         // everything as a file
+	PickImport     = "import-pick"    // asks for a file
+	Figures        = "figures"        // the answer as a file of JSON
+	Share          = "share"          // hands the answer's sentences on
+	Print          = "print"          //
+	Undo           = "undo"           //
+	Dismiss        = "dismiss"        // takes the message away
+	Pull           = "pull"           // shows or hides the pull diagram
+	MoveStaff      = "move-staff"     // X: place in the section
+	StaffStep      = "staff-step"     // Arg: "+" or "-": a fiftieth of the hill
+	MoveWeight     = "drag-weight"    // X: place in the balance
+	WeightStep     = "weight-step"    // Arg: "+" or "-": a fiftieth of what is wanted
+	WeightBack     = "weight-back"    // the weight hangs again where the hill puts it
+	SetLanguage    = "language"       // Arg: tag
+	SetUnits       = "units"          // Arg: metric or imperial
+	SetMark        = "mark"           // Arg: point or comma
+	SetTheme       = "theme"          // Arg: sun, dusk, or device
+	GoTo           = "go"             // Arg: a place of the page: GoHillside or GoSentence
+	Measure        = "measure"        // Arg: a way to measure a grade, "" ends it
+	DialUp         = "dial-up"        // Arg: path of a dial
+	DialDown       = "dial-down"      // Arg: path of a dial
+	Pick           = "pick"           // Arg: name=choice
+	Average        = "average"        // begins to average what the sensor says
+	Freeze         = "freeze"         // holds what is seen along the edge, or goes on
+	OneReading     = "once"           // makes a reading of one average
+	StartOver      = "over"           // forgets the averages
+	Read           = "read"           // makes a reading of what is set, recorded or marked
+	TrackHandle    = "handle"         // Arg: DialFrom or DialTo, X: place in the section
+	Tell           = "tell"           // says the answer
+	PlaceNext      = "place-next"     // goes on to the next pitch
+	PlaceTo        = "place-to"       // Arg: a pitch's name
+	PlaceName      = "place-name"     // Text: the whole field
+	ReadingOpen    = "reading"        // Arg: id
+	ReadingNote    = "note"           // Arg: id=note
+	TypeNote       = "note-type"      // Arg: id, Text: the whole field
+	ReadingForget  = "reading-forget" // Arg: id
+	HillOfReadings = "readings-hill"  // makes a hill of the day's pitches
+	ReadingsCSV    = "readings-csv"   // all readings as a file
+	ReadingsGPX    = "readings-gpx"   // all readings as a file
+	GroupOpen      = "group"          // shows or hides who can be added
+	GroupAdd       = "group-add"      // Arg: a rider's id, on the chosen bike
+	GroupTake      = "group-take"     // Arg: number in the group: they become who is asked about
+	GroupDrop      = "group-drop"     // Arg: number in the group
+
+	UseNew     = "use-new"    // takes the new version
+	GoOn       = "go-on"      // after something broke
+	SaveBroken = "broke-save" // everything as a file, after something broke
 )
 
 // What the device reports.
@@ -79,6 +118,13 @@ const (
 	DeviceLikes = "device-likes" // Arg: language tag, Text: "," or ".": what the device prefers
 	Broke       = "broke"        // Text: what happened
 	CanShare    = "can-share"    //
+
+	Tilted       = "tilted"        // Leans
+	Sensor       = "sensor"        // Arg: absent or refused
+	Located      = "located"       // Fix
+	LocateFailed = "locate-failed" // Arg: absent, refused or lost
+	Zone         = "zone"          // X: what the device's clock is ahead of UTC [s]
+	Voiced       = "voiced"        // Arg: tags of the languages that the device speaks by itself
 )
 
 // ByHand lists the names that an element may carry in data-act.
@@ -87,6 +133,9 @@ func ByHand() []string {
 		Open, Close, ShowPath, ShowAll, StepUp, StepDown, Type, Typed, SetTo, SourceTo, Reset, RoundTrip, Choose,
 		TypeSections, Sketch, SketchClear, SketchLong, PickTrack, StopTrack, TypeName, Keep, Forget, Export, PickImport,
 		Figures, Share, Print, Undo, Dismiss, Pull, MoveStaff, StaffStep, MoveWeight, WeightStep, WeightBack,
-		SetLanguage, SetUnits, SetMark, SetTheme, UseNew, GoOn, SaveBroken,
+		SetLanguage, SetUnits, SetMark, SetTheme,
+		GoTo, Measure, DialUp, DialDown, Pick, Average, Freeze, OneReading, StartOver, Read, TrackHandle, Tell,
+		PlaceNext, PlaceTo, PlaceName, ReadingOpen, ReadingNote, TypeNote, ReadingForget, HillOfReadings, ReadingsCSV, ReadingsGPX,
+		GroupOpen, GroupAdd, GroupTake, GroupDrop, UseNew, GoOn, SaveBroken,
 	}
 }

@@ -19,6 +19,14 @@ const (
 	PrintPage                       //
 	UseNewVersion                   //
 	Dress                           // the page's language and theme have changed
+	StartTilt                       // comes back as Tilted, Sensor
+	StopTilt                        //
+	StartRide                       // comes back as Located, LocateFailed
+	StopRide                        //
+	Wake                            // keeps the screen awake
+	Sleep                           // lets it sleep
+	Speak                           // Key: language, Data: plain text
+	Tone                            // Key: a pattern of package words, or "step", "done"
 	Show                            // Key: the id of an element to bring into view and to focus
 )
 

@@ -287,6 +287,7 @@ func (s *State) restore(a Action) {
 	s.Question.Source = copied(s.base.Source)
 	s.apply(settings.Values, settings.Sources)
 	s.pickHill()
+	s.restoreHillside(settings.Hillside)
 	s.stale = true
 }
 
@@ -294,7 +295,7 @@ func (s *State) restore(a Action) {
 func (s *State) settings() keep.Settings {
 	out := keep.Settings{
 		Lang: s.likes.lang, Units: s.likes.units, Mark: s.likes.mark, Theme: s.Theme,
-		Chosen: map[string]string{},
+		Chosen: map[string]string{}, Hillside: s.hillside(),
 	}
 	for kind, id := range s.Chosen {
 		out.Chosen[string(kind)] = id

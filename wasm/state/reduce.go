@@ -42,6 +42,9 @@ func (s *State) do(a Action) []Effect {
 	if did, effects := s.doHill(a); did {
 		return effects
 	}
+	if did, effects := s.doHillside(a); did {
+		return effects
+	}
 	return s.doRest(a)
 }
 

@@ -63,6 +63,8 @@ type State struct {
 	Name        string // as typed, for what is to be kept
 	Reading     Reading
 
+	Side Hillside
+
 	StaffM   float64 // where the staff stands along the road [m]; NaN: nowhere
 	WeightN  float64 // where the weight was dragged to [N]; NaN: it hangs free
 	ShowPull bool
@@ -117,6 +119,8 @@ type Device struct {
 	CanShare bool
 	Dropping bool
 	WidthPx  float64 // how wide pictures are
+	ZoneS    float64 // what its clock is ahead of UTC [s]
+	Voices   string  // tags of the languages that it speaks without a network
 }
 
 // likes is what the person chose and what the device prefers; "" is no choice.
@@ -217,6 +221,7 @@ func (s *State) offers(l words.Lang) bool {
 // stays and Trouble says why.
 func (s *State) answer() {
 	s.stale = false
+	s.consider()
 	if s.Profile == nil {
 		return
 	}

@@ -24,7 +24,7 @@ func (v *viewer) wayDown() *Node {
 	lines := v.DownLines(v.Rig, d, v.Question.Ride.DownMps)
 	said := Parts{El("p", Class("down-most"), v.large(lines[0], v.Speed(d.MostMps)))}
 	if d.Falls {
-		said = append(said, El("div", Class("down-asks"), v.downSpeed(), v.wetOrDry()))
+		said = append(said, El("div", Class("down-asks"), v.downSpeed(), If(!v.Side.Open, v.wetOrDry())))
 	}
 	for _, line := range lines[1:] {
 		said = append(said, El("p", Text(line)))

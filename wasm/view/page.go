@@ -5,8 +5,8 @@
 // An element with data-region is a part that is rendered anew by itself when
 // it changed; regions may lie in each other. data-act and data-arg on an
 // element name the action (package state) that a touch asks for. A place of
-// DESIGN.md that is yet to come (Hillside, Counter, Bench) adds its regions in
-// Page, and its button in the masthead.
+// DESIGN.md has its own tree (hillside.go) and its button in the masthead; those
+// yet to come (Counter, Bench) do as it does.
 package view
 
 import (
@@ -22,6 +22,9 @@ import (
 // Page is the whole page: what stands inside <div id="app">.
 func Page(s *state.State) *Node {
 	v := &viewer{State: s, Voice: s.Voice}
+	if s.Side.Open {
+		return v.hillside()
+	}
 	return El("div", Class("page"),
 		draw.Hatches(),
 		v.masthead(),
@@ -71,6 +74,14 @@ func capital(s string) string {
 	return string(unicode.ToUpper(r)) + s[size:]
 }
 
+// elsewhere leads to the other place of the page.
+func (v *viewer) elsewhere() *Node {
+	if v.Side.Open {
+		return button("plain", state.GoTo, state.GoSentence, ID("go-hillside"), v.say(words.GoSentence))
+	}
+	return button("plain", state.GoTo, state.GoHillside, ID("go-sentence"), v.say(words.GoHillside))
+}
+
 func (v *viewer) masthead() *Node {
 	opener := func(place string, key words.Key) *Node {
 		return button("plain", state.Open, place, ID("blank-"+place),
@@ -78,7 +89,7 @@ func (v *viewer) masthead() *Node {
 	}
 	return region("header", "masthead", Class("masthead"),
 		El("h1", Text(v.Shop.Name)),
-		El("div", Class("openers"), opener(state.PlaceKept, words.OpenKept), opener(state.PlaceSettings, words.HeadSettings)),
+		El("div", Class("openers"), v.elsewhere(), opener(state.PlaceKept, words.OpenKept), opener(state.PlaceSettings, words.HeadSettings)),
 		If(v.Device.Waiting, El("p", Class("waiting"), With("role", "status"),
 			v.say(words.NewVersion), Text(" "), button("plain", state.UseNew, "", v.say(words.ButtonUseNew)))),
 	)

@@ -42,7 +42,9 @@ func (v *viewer) place() *Node {
 // as it is now, and the way out, both under the thumb.
 func (v *viewer) placeFoot() *Node {
 	var now Part
-	if v.Answer != nil {
+	if p := v.Side.Pitch; v.Side.Open && p != nil {
+		now = El("p", Class("now "+wordClass(p.Word)), wordShape(p.Word), Text(v.Voice.Word(p.Word)))
+	} else if v.Answer != nil && !v.Side.Open {
 		now = El("p", Class("now word-"+v.Answer.Verdict.String()), v.shape(), Text(v.Verdict(v.Answer.Verdict)),
 			El("span", Class("now-room"), Text(v.Headroom(v.Answer.Balance.Headroom()))))
 	}

@@ -145,6 +145,11 @@ func inputAt(path string) (input, bool) {
 			return in, true
 		}
 	}
+	for _, in := range dials {
+		if in.path == path {
+			return in, true
+		}
+	}
 	return input{show: asIs}, false
 }
 

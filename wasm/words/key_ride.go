@@ -264,5 +264,5 @@ const (
 	OnGround
 	TourTimesBack
 
-	keys // how many there are
+	rideKeys // how many there are so far; key_hillside.go goes on
 )

@@ -10,6 +10,7 @@ import (
 	"hillwright/physics/hill"
 	"hillwright/physics/ride"
 	"hillwright/physics/rig"
+	"hillwright/physics/slope"
 	"hillwright/wasm/keep"
 )
 
@@ -24,7 +25,10 @@ func (v Voice) Problem(err error) string {
 	var track *hill.TrackError
 	var profile *hill.ProfileError
 	var fault keep.Fault
+	var grade *slope.Error
 	switch {
+	case errors.As(err, &grade):
+		return v.slopeProblem(grade)
 	case errors.As(err, &input):
 		return v.inputProblem(input)
 	case errors.As(err, &section):

@@ -3,9 +3,9 @@
 // and sentences made from the computation. Start with Voice and Voice.Say;
 // Voice.Why makes the sentence below the answer.
 //
-// To add a word: add its constant to Key in key.go, or key_ride.go (where it
+// To add a word: add its constant to Key in key.go, or key_ride.go or key_hillside.go (where it
 // belongs, with a comment when the blanks are not plain), and its text to
-// english.go and german.go, or english_ride.go and german_ride.go. Blanks are written {0}, {1}; every language must have the same
+// english.go and german.go, or english_ride.go and german_ride.go, and so on. Blanks are written {0}, {1}; every language must have the same
 // ones, in any order. Check tells what is missing.
 package words
 
@@ -59,16 +59,18 @@ type Voice struct {
 }
 
 var (
-	english   = whole(englishPage, englishRide)
-	german    = whole(germanPage, germanRide)
+	english   = whole(englishPage, englishRide, englishHillside)
+	german    = whole(germanPage, germanRide, germanHillside)
 	catalogue = [langs]*[keys]string{&english, &german}
 )
 
-// whole lays the two parts of a language's catalogue over each other.
-func whole(page, ride [keys]string) [keys]string {
-	for k, text := range ride {
-		if text != "" {
-			page[k] = text
+// whole lays the parts of a language's catalogue over each other.
+func whole(page [keys]string, parts ...[keys]string) [keys]string {
+	for _, part := range parts {
+		for k, text := range part {
+			if text != "" {
+				page[k] = text
+			}
 		}
 	}
 	return page
