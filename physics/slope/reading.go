@@ -87,6 +87,9 @@ func (r Reading) Reversed() Reading {
 	return r
 }
 
+// finestError is the least error that a reading may state [grade].
+const finestError = 1e-9
+
 // Typed is a grade that a person knows, from a road sign or a map. The error is
 // 1 σ; a sign in whole per cent is right to about 0.01 (common practice, no
 // source).
@@ -94,8 +97,8 @@ func Typed(grade unit.Grade, err float64) (Reading, error) {
 	return checked(Reading{Grade: grade, Error: err, Method: ByHand})
 }
 
-// checked lets a reading out that is a number, with a positive error, and no
-// steeper than SteepestReading.
+// checked lets a reading out that is a number, with an error above 0, and no
+// steeper than SteepestReading, which also bounds its error.
 func checked(r Reading) (Reading, error) {
 	switch {
 	case !finite(float64(r.Grade)):
@@ -104,7 +107,7 @@ func checked(r Reading) (Reading, error) {
 		return Reading{}, &Error{Kind: OutOfRange, What: "grade", Got: float64(r.Grade)}
 	case !finite(r.Error):
 		return Reading{}, &Error{Kind: NotANumber, What: "error", Got: r.Error}
-	case r.Error <= 0:
+	case r.Error < finestError || r.Error > float64(SteepestReading):
 		return Reading{}, &Error{Kind: OutOfRange, What: "error", Got: r.Error}
 	}
 	return r, nil
