@@ -14,10 +14,19 @@ type Device struct {
 	worker   *worker
 	dressed  bool // the browser's frame was given a colour
 	stopped  int  // how many readings were stopped: an older inline one ends
+
+	tilt     *tilt
+	unlocate func()   // ends locating
+	awake    func()   // is told that the screen is kept awake; nil when it may sleep
+	watching bool     // the page's showing is watched for the lock
+	lock     js.Value // on the screen
+	sound    js.Value // an audio context, once there was a tone
 }
 
 // New takes hold of the browser.
-func New() *Device { return &Device{database: js.Undefined()} }
+func New() *Device {
+	return &Device{database: js.Undefined(), lock: js.Undefined(), sound: js.Undefined()}
+}
 
 // Now is the time in seconds since 1970.
 func (d *Device) Now() int64 { return int64(js.Global().Get("Date").Call("now").Float() / 1000) }

@@ -45,7 +45,7 @@ func (p *page) listen() {
 type hand struct {
 	page     *page
 	drag     js.Value // the element that is dragged
-	act      string   // its action, "" when nothing is dragged
+	act, arg string   // its action, "" when nothing is dragged
 	repeats  int      // numbers the presses of stepper buttons
 	repeated bool     // the press stepped on by itself: the click that ends it counts for nothing
 }
@@ -72,12 +72,12 @@ func orEmpty(v js.Value) string {
 
 // isField tells that an action comes from a field and not from a press.
 func isField(act string) bool {
-	return act == state.Type || act == state.TypeName || act == state.TypeSections
+	return act == state.Type || act == state.TypeName || act == state.TypeSections || act == state.TypeNote || act == state.PlaceName
 }
 
 // isDrag tells that an action follows the finger.
 func isDrag(act string) bool {
-	return act == state.MoveStaff || act == state.MoveWeight || act == state.Sketch
+	return act == state.MoveStaff || act == state.MoveWeight || act == state.Sketch || act == state.TrackHandle
 }
 
 func (h *hand) do(a state.Action) {
@@ -139,10 +139,10 @@ func (h *hand) down(e js.Value) {
 	h.repeated = false
 	switch {
 	case isDrag(act):
-		h.drag, h.act = el, act
+		h.drag, h.act, h.arg = el, act, arg
 		el.Call("setPointerCapture", e.Get("pointerId"))
 		h.move(e)
-	case act == state.StepUp || act == state.StepDown || act == state.StaffStep:
+	case act == state.StepUp || act == state.StepDown || act == state.StaffStep || act == state.DialUp || act == state.DialDown:
 		h.repeats++
 		press := h.repeats
 		device.After(holdFor, func() { h.repeat(press, state.Action{Name: act, Arg: arg}) })
@@ -171,7 +171,7 @@ func (h *hand) move(e js.Value) {
 	if box.Get("width").Float() == 0 {
 		return
 	}
-	h.do(state.Action{Name: h.act, X: at("clientX", "left", "width"), Y: at("clientY", "top", "height")})
+	h.do(state.Action{Name: h.act, Arg: h.arg, X: at("clientX", "left", "width"), Y: at("clientY", "top", "height")})
 }
 
 func (h *hand) up(js.Value) {

@@ -43,6 +43,7 @@ func (p *page) mount(things []byte, settings string) {
 		p.restore(state.Action{Name: state.Restored, Data: things, Text: settings})
 	}
 	p.state, _ = state.Reduce(p.state, state.Action{Name: state.Wide, X: p.works.PictureWidth(p.state.Device.WidthPx)})
+	p.state, _ = state.Reduce(p.state, state.Action{Name: state.Zone, X: p.works.ZoneS()})
 	p.book.take(view.Page(p.state))
 	p.works.Dress(p.state.Voice.Lang.Tag(), p.state.Theme)
 	if err := vecty.RenderInto("#app", &root{Book: p.book}); err != nil {
@@ -79,6 +80,11 @@ func (p *page) reports() {
 	if p.works.CanShare() {
 		p.do(state.Action{Name: state.CanShare})
 	}
+	p.works.OnVoices(func(tags string) {
+		if tags != p.state.Device.Voices {
+			p.do(state.Action{Name: state.Voiced, Arg: tags})
+		}
+	})
 }
 
 // do is the loop: action, state, view, effects. A failure anywhere leaves the
@@ -159,6 +165,8 @@ func (p *page) run(e state.Effect) {
 		p.works.Dress(p.state.Voice.Lang.Tag(), p.state.Theme)
 	case state.Show:
 		p.works.Show(e.Key)
+	default:
+		p.runHillside(e)
 	}
 }
 

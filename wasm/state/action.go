@@ -123,6 +123,7 @@ const (
 	Sensor       = "sensor"        // Arg: absent or refused
 	Located      = "located"       // Fix
 	LocateFailed = "locate-failed" // Arg: absent, refused or lost
+	Awoken       = "awoken"        // the screen is kept awake
 	Zone         = "zone"          // X: what the device's clock is ahead of UTC [s]
 	Voiced       = "voiced"        // Arg: tags of the languages that the device speaks by itself
 )

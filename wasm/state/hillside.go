@@ -84,6 +84,8 @@ func (s *State) doHillside(a Action) (bool, []Effect) {
 	switch a.Name {
 	case GoTo:
 		return true, s.goTo(a.Arg)
+	case Awoken:
+		s.Side.Awake = s.Side.Way != ""
 	case Zone:
 		s.Device.ZoneS = a.X
 	case Voiced:
@@ -149,7 +151,7 @@ func (s *State) stopMeasuring() []Effect {
 		effects = append(effects, Effect{Kind: StopRide})
 		s.Side.Ride = Recording{}
 	}
-	s.Side.Way, s.Side.Err = "", nil
+	s.Side.Way, s.Side.Err, s.Side.Awake = "", nil, false
 	return effects
 }
 

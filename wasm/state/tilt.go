@@ -26,8 +26,8 @@ type Tilt struct {
 	steady *slope.Steady
 }
 
-// Lean is one sample of the sensor: when [s], up in the phone's axes, and what
-// it is rounded to.
+// Lean is one sample of the sensor: when [s since 1970], up in the phone's axes,
+// and what it is rounded to.
 type Lean struct {
 	TimeS float64
 	Up    slope.Up
@@ -99,13 +99,10 @@ func (s *State) tilted(leans []Lean) []Effect {
 	}
 	t.Now = t.steady.Average()
 	if s.Side.Way == WayTilt && t.Now.Enough {
-		return s.averaged(leans[len(leans)-1].Now())
+		return s.averaged(int64(leans[len(leans)-1].TimeS))
 	}
 	return nil
 }
-
-// Now is the sample's time, for what is kept; samples are timed since 1970.
-func (l Lean) Now() int64 { return int64(l.TimeS) }
 
 // averaged takes an average that is good enough: the first of two, or the
 // second, which makes a reading.

@@ -36,6 +36,7 @@ func (v *viewer) wayDown() *Node {
 	return region("section", "down", With("aria-labelledby", "down-title"),
 		El("h2", ID("down-title"), Text(capital(v.Voice.Say(words.LabelDown)))),
 		said,
+		If(v.Side.Open && d.Falls, v.downFigures(d)),
 		El("div", Class("canvas"), draw.Brakes(d, v.Rig, brakesWide, v.Voice)),
 		If(len(list) > 1, El("ul", list)))
 }

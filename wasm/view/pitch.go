@@ -4,6 +4,7 @@ import (
 	"math"
 	"strconv"
 
+	"hillwright/physics/ride"
 	"hillwright/physics/rig"
 	"hillwright/physics/unit"
 	. "hillwright/wasm/dom"
@@ -209,4 +210,15 @@ func (v *viewer) nameOf(kind keep.Kind, id string) string {
 		}
 	}
 	return id
+}
+
+// downFigures are the way down's figures, readable at arm's length.
+func (v *viewer) downFigures(d *ride.WayDown) *Node {
+	stop := v.Length(d.StoppingM)
+	if math.IsInf(d.StoppingM, 1) {
+		stop = v.Voice.Say(words.DownNoStopping)
+	}
+	return El("dl", Class("pitch-figures"),
+		El("div", El("dt", v.say(words.DownMostIs)), El("dd", Text(v.Speed(d.MostMps)))),
+		El("div", El("dt", v.say(words.DownStop, v.Speed(v.Question.Ride.DownMps))), El("dd", Text(stop))))
 }

@@ -7,7 +7,6 @@ var englishHillside = [keys]string{
 	HeadGrade:          "Grade here",
 	HeadMeasure:        "Measure the grade",
 	HeadPitch:          "Go or don't",
-	HeadDown:           "The way down",
 	HeadGroup:          "The group",
 	HeadReadings:       "Readings",
 	NoGrade:            "Nothing measured here yet.",

@@ -7,7 +7,6 @@ var germanHillside = [keys]string{
 	HeadGrade:          "Steigung hier",
 	HeadMeasure:        "Steigung messen",
 	HeadPitch:          "Fahren oder nicht",
-	HeadDown:           "Die Abfahrt",
 	HeadGroup:          "Die Gruppe",
 	HeadReadings:       "Messungen",
 	NoGrade:            "Hier ist noch nichts gemessen.",

@@ -8,7 +8,6 @@ const (
 	HeadGrade
 	HeadMeasure
 	HeadPitch
-	HeadDown
 	HeadGroup
 	HeadReadings
 	NoGrade
