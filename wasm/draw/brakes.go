@@ -47,7 +47,10 @@ func Brakes(d *ride.WayDown, r *rig.Rig, wide float64, v words.Voice) *dom.Node 
 		cautionC := b.kind.CautionC.Usual
 		name, peak := v.Say(b.name), v.Temperature(unit.Celsius(b.peakC))
 		caution := v.Say(words.BrakeCaution, v.Temperature(unit.Celsius(cautionC)))
-		said += name + ": " + peak + " (" + caution + "). "
+		if said != "" {
+			said += "; "
+		}
+		said += name + ": " + peak + " (" + caution + ")"
 		ceiling, floor := top+bandWords, top+bandWords+barTall
 		var frame, bar, mark path
 		frame.rect(box{from, ceiling, to, floor})
@@ -66,5 +69,5 @@ func Brakes(d *ride.WayDown, r *rig.Rig, wide float64, v words.Voice) *dom.Node 
 			label{lines: []string{peak}, x: to, y: top + 12, px: smallPx, anchor: fromEnd, class: "figure"}.node())
 		top += barPitch
 	}
-	return picture("img", "brakes", v.Say(words.GroupBrakes), said, Size{wide, top}, parts)
+	return picture("img", "brakes", v.Say(words.GroupBrakes), said+".", Size{wide, top}, parts)
 }

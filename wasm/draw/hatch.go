@@ -7,7 +7,7 @@ import (
 
 // Hatches holds the patterns of the ground, once for a page: slanting lines far
 // apart for open ground, crossed and close for close ground, filled for solid.
-// They differ in tone and in drawing, so they read in one colour and in print.
+// Upright lines are for what is bad in a strip. They differ in tone and in drawing, so they read in one colour and in print.
 func Hatches() *dom.Node {
 	return dom.SVG(dom.Class("hatches"),
 		dom.With("width", "0"), dom.With("height", "0"), dom.With("aria-hidden", "true"), dom.With("focusable", "false"),
@@ -31,6 +31,10 @@ func Hatches() *dom.Node {
 				lines.line(7, 7)
 			}),
 			pattern("solid", 6, nil),
+			pattern("upright", 4, func(lines *path) {
+				lines.move(2, -1)
+				lines.line(2, 5)
+			}),
 		))
 }
 

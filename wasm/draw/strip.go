@@ -12,7 +12,7 @@ import (
 
 // Measures of the strip [px]: a band is a row of words over a run of line.
 const (
-	bandWords = 17.0
+	bandWords = 18.0
 	bandTall  = 22.0
 	bandPitch = bandWords + bandTall + 7
 )
@@ -29,7 +29,7 @@ type band struct {
 	low, high float64
 	mark      float64
 	marked    bool   // the mark is drawn
-	markText  string // what it says beside the name, where there is room
+	markText  string // what is said of it beside the name, where there is room
 	above     bool   // it is bad above the mark, else below it
 	write     func(float64) string
 }
@@ -64,6 +64,7 @@ func bandsOf(a *ride.Answer, r *rig.Rig, kept float64, v words.Voice) []band {
 	}
 	if whole := r.Endurance.ReserveJ; whole > 0 && len(t.ReserveJ) == n {
 		out = append(out, band{name: v.Say(words.BandLegs), of: t.ReserveJ, high: whole, mark: LowLegs * whole, marked: true,
+			markText: v.Say(words.BandLow, v.Percent(LowLegs)),
 			write: func(j float64) string { return v.Percent(j / whole) }})
 	}
 	return out
@@ -149,7 +150,7 @@ func (s *strip) draw(b *band, top float64) dom.Parts {
 	}
 	line.chain(thin(points))
 	return dom.Parts{
-		beyond.node("ground-beyond"), hatched.node("band-bad", dom.With("fill", "url(#hatch-close)")),
+		beyond.node("ground-beyond"), hatched.node("band-bad", dom.With("fill", "url(#hatch-upright)")),
 		frame.node("band-frame"), mark.node("band-mark"),
 		dom.If(len(hatched.d) > 0, line.node("band-halo")), line.node("band-line"),
 	}
@@ -159,7 +160,7 @@ func (s *strip) draw(b *band, top float64) dom.Parts {
 func (s *strip) labels(b *band, y float64) dom.Parts {
 	value := label{lines: []string{b.write(b.of[len(b.of)-1])}, x: s.size.W - sectionSide, y: y, px: smallPx, anchor: fromEnd, class: "figure halo"}
 	name := label{lines: []string{b.name}, x: sectionSide, y: y, px: smallPx, class: "words halo"}
-	if b.marked && b.markText != "" {
+	if b.marked {
 		long := name
 		long.lines = []string{b.name + " · " + b.markText}
 		if long.box().x1+10 < value.box().x0 {
@@ -246,7 +247,7 @@ func (s *strip) summary() string {
 			text += "; "
 		}
 		text += b.name + ": " + b.write(b.of[0]) + " → " + b.write(b.of[len(b.of)-1])
-		if b.marked && b.markText != "" {
+		if b.marked {
 			text += " (" + b.markText + ")"
 		}
 	}

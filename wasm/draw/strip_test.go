@@ -2,6 +2,7 @@ package draw
 
 import (
 	"math"
+	"os"
 	"strings"
 	"testing"
 
@@ -159,6 +160,20 @@ func TestLongStripsAreThinned(t *testing.T) {
 		d, _ := bad.Attr("d")
 		if n := strings.Count(d, "M"); n > 360 {
 			t.Errorf("%d hatched pieces for 360 px", n)
+		}
+	}
+}
+
+// The stylesheet gives a strip of each number of bands the height that it has,
+// so that nothing jumps when the true width becomes known.
+func TestStylesheetKnowsTheStripsHeight(t *testing.T) {
+	css, err := os.ReadFile("../../site/style.css")
+	if err != nil {
+		t.Fatal(err)
+	}
+	for n := 1; n <= 3; n++ {
+		if rule := ".bands-" + num(float64(n)) + " .picture-strip { height: " + num(float64(n)*bandPitch) + "px; }"; !strings.Contains(string(css), rule) {
+			t.Errorf("site/style.css lacks %q", rule)
 		}
 	}
 }

@@ -67,7 +67,8 @@ func readPDF(file []byte) sheet {
 	return s
 }
 
-// bare takes the spaces out: the browser places words without them.
+// bare takes the spaces out: a printed page has none, and packing leaves out
+// those that make no difference.
 func bare(text string) string { return strings.Join(strings.Fields(text), "") }
 
 func (s sheet) has(words string) bool { return strings.Contains(s.text, bare(words)) }

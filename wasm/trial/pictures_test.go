@@ -36,6 +36,10 @@ func TestPictures(t *testing.T) {
 			p.answers(newAsked(t, "", "", "", "", "mill-lane"))
 			p.drag("#section .touch", 0.05, -0.08)
 			p.until("the staff stands", `document.querySelector("#section .staff[transform]") !== null`)
+			if d.mobile { // down to the end of the section
+				tall := eval[float64](p, `document.querySelector("#section").getBoundingClientRect().bottom + scrollY`)
+				p.do(chromedp.EmulateViewport(d.wide, int64(tall), chromedp.EmulateScale(2), chromedp.EmulateTouch, chromedp.EmulateMobile))
+			}
 			eval[bool](p, `(scrollTo({top: 0, behavior: "instant"}), document.activeElement.blur(), new Promise(done => requestAnimationFrame(() => done(true))))`)
 			p.take(d.name + "-" + theme + ".png")
 		}

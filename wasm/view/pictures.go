@@ -19,7 +19,7 @@ func (v *viewer) section() *Node {
 	picture := draw.Section(v.Profile, v.Answer, size, v.Voice)
 	kept := v.Question.Ride.ChargeKept
 	strip := draw.Strip(v.Profile, v.Answer, v.Rig, kept, size, v.Voice)
-	reading := Parts{v.say(words.SectionHelp)}
+	reading := Parts{v.help(words.SectionHelp)}
 	if !math.IsNaN(v.StaffM) {
 		at := draw.SectionAtDistance(v.Profile, v.Answer, size, v.StaffM)
 		put(picture, "staff", at.Transform())
@@ -41,6 +41,9 @@ func (v *viewer) section() *Node {
 			draw.SectionText(v.Profile, v.Answer, v.Rig, v.Voice), draw.StripText(v.Profile, v.Answer, v.Rig, kept, v.Voice)),
 	)
 }
+
+// help says how a picture is touched and read: nothing for paper.
+func (v *viewer) help(k words.Key) *Node { return El("span", Class("help"), v.say(k)) }
 
 // put moves the part of a picture with a class to a place and makes it a
 // region, so that it alone changes while a finger moves it.
@@ -74,7 +77,7 @@ func (v *viewer) balance() *Node {
 		return region("section", "balance", Bare("hidden"))
 	}
 	b := &v.Answer.Balance
-	reading := Parts{v.say(words.BalanceHelp)}
+	reading := Parts{v.help(words.BalanceHelp)}
 	if grade, tried := v.TriedGrade(); tried {
 		reading = Parts{El("b", Text(v.Voice.Pull(v.WeightN))), Text(" · "), v.say(words.BalanceTried, v.Grade(grade))}
 	}
@@ -98,7 +101,7 @@ func (v *viewer) pull() *Node {
 	}
 	grade, running := v.Answer.Balance.Grade, v.Settled()
 	return region("section", "pull", Class("picture-part"), opener,
-		El("p", Class("staff-reading"), v.say(words.PullHelp)),
+		El("p", Class("staff-reading"), v.help(words.PullHelp)),
 		El("div", Class("canvas"), draw.PullDiagram(v.Rig, grade, running, v.PullSize(), v.Voice)),
 		v.table(words.SameInFigures, words.PullTitle, draw.PullText(v.Rig, grade, running, v.Voice)),
 	)

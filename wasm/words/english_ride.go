@@ -212,6 +212,7 @@ var englishRide = [keys]string{
 	BandLegs:   "legs",
 	BandEasing: "eases off from {0}",
 	BandKept:   "{0} kept back",
+	BandLow:    "low below {0}",
 
 	TourOneWay: "one way",
 	AskPauses:  "{0}, with pauses of {1}",

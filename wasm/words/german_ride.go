@@ -212,6 +212,7 @@ var germanRide = [keys]string{
 	BandLegs:   "Beine",
 	BandEasing: "nimmt sich ab {0} zurück",
 	BandKept:   "{0} Rückhalt",
+	BandLow:    "knapp unter {0}",
 
 	TourOneWay: "nur hin",
 	AskPauses:  "{0}, mit je {1} Pause",

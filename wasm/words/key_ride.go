@@ -239,11 +239,12 @@ const (
 	ReasonPackCut
 
 	// The strip's bands, short. BandEasing: the temperature from which it eases
-	// off. BandKept: the charge kept back.
+	// off. BandKept: the charge kept back. BandLow: a part.
 	BandMotor
 	BandLegs
 	BandEasing
 	BandKept
+	BandLow
 
 	// The round trip and the charge in the sentence of what is asked. AskPauses:
 	// what was said so far, the pause. AskCharge: the charge.
