@@ -265,6 +265,11 @@ func TestTrackStretch(t *testing.T) {
 	if far, _ := TrackStretch(&p, 200, 300, Satellite); far.Error <= r.Error || r.Error <= 0 || r.LengthM != 100 {
 		t.Errorf("satellite %v is not less sure than barometric %v", far.Error, r.Error)
 	}
+	// Heights 0.5 m off at each end, together by 200 m; the length 1 % and 2 m off.
+	rise, sine := 0.5*math.Sqrt(2*(1-math.Exp(-0.5))), unit.Grade(0.12).Sin()
+	if want := math.Hypot(rise, sine*math.Hypot(1, 2)) / 100 / math.Pow(unit.Grade(0.12).Cos(), 3); math.Abs(r.Error-want) > 1e-12 {
+		t.Errorf("its error: %v, want %v", r.Error, want)
+	}
 	r, err = TrackStretch(&p, -50, 9999, Surveyed)
 	wantGrade(t, "all of it", r, err, math.Tan(math.Asin(p.AscentM()/500)))
 	_, err = TrackStretch(&p, 200, 210, Barometric)
@@ -297,6 +302,22 @@ func TestRideRefusals(t *testing.T) {
 	refused(t, "four fixes", err, NotEnough)
 	_, err = RideStretch(nil, Barometric)
 	refused(t, "none", err, NotEnough)
+}
+
+// On a road that bends from steep to level the heights lie far from one
+// straight line, and the error says so.
+func TestRideOnABendingRoadIsLessSure(t *testing.T) {
+	ride := func(bend float64) Reading {
+		var fixes []Fix
+		for i := range 60 {
+			x := float64(i-30) / 30
+			fixes = append(fixes, Fix{hill.Point{LatDeg: 47 + 3e-5*float64(i), LonDeg: 8, HeightM: 400 + 10*x + bend*x*x, TimeS: float64(i)}, 3, 3})
+		}
+		return must(RideStretch(fixes, Barometric))
+	}
+	if straight, bent := ride(0), ride(10); bent.Error < 3*straight.Error {
+		t.Errorf("bent road ± %v, straight road ± %v", bent.Error, straight.Error)
+	}
 }
 
 // A rider who stands for two minutes with jittering fixes has not ridden on.

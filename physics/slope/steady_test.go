@@ -94,8 +94,8 @@ func TestSteadyTellsADrift(t *testing.T) {
 	still := quiet(5, 0)
 	feed(s, 0, 20, func(t float64) float64 { return still(t) + 0.05*degree*t })
 	a := s.Average()
-	if !a.Drifting || a.Enough || a.Error < 0.3*degree {
-		t.Errorf("a drift of a degree: %+v", a)
+	if !a.Drifting || a.Enough || a.Error < 0.5*degree {
+		t.Errorf("a drift of a degree, half of which may be error: %+v", a)
 	}
 }
 
