@@ -51,11 +51,11 @@ func Marks(section *dom.Node, s Size, act string, args [2]string, names [2]strin
 		if i == 0 {
 			side = -1
 		}
-		flag.move(0, 12)
-		flag.line(side*26, 12)
-		flag.line(side*18, 23)
-		flag.line(side*26, 34)
-		flag.line(0, 34)
+		flag.move(0, s.H-68)
+		flag.line(side*26, s.H-68)
+		flag.line(side*18, s.H-57)
+		flag.line(side*26, s.H-46)
+		flag.line(0, s.H-46)
 		flag.close()
 		section.Add(dom.El("g", dom.With("data-region", "mark-"+args[i]), dom.With("transform", "translate("+num(x[i])+" 0)"),
 			line.node("stake"), flag.node("peg-binds"),

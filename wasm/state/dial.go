@@ -61,7 +61,7 @@ func (s *State) turnDial(path string, sign float64) {
 
 func (s *State) setDial(path string, v float64) {
 	s.Side.dials = with(s.Side.dials, path, v)
-	s.Side.Err = nil
+	s.Side.Err, s.Side.stale = nil, true
 	switch path {
 	case DialPaces, DialPace, DialRolled:
 		s.lengthFromCount(path)

@@ -27,8 +27,7 @@ func (s *State) doGroup(a Action) {
 		s.choose(keep.Bike, group[at].Bike)
 		s.choose(keep.Rider, group[at].Rider)
 	}
-	s.Side.Group = group
-	s.stale = true
+	s.Side.Group, s.Side.stale = group, true
 }
 
 // Weakest is the place of the pair in the group that has least to spare, −1

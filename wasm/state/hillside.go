@@ -47,6 +47,8 @@ type Hillside struct {
 
 	// Pitch is the answer for the pitch, nil before its grade is known.
 	Pitch *Pitch
+
+	stale bool // something changed since Pitch and the group's were answered
 }
 
 // Pair is one of the group: a rider on a bike, with its answer.
@@ -158,7 +160,7 @@ func (s *State) stopMeasuring() []Effect {
 // consider answers for the pitch and for the group, when the grade or anything
 // else of the question has changed.
 func (s *State) consider() {
-	s.Side.Pitch = nil
+	s.Side.Pitch, s.Side.stale = nil, false
 	read, ok := s.Combined()
 	group := append([]Pair(nil), s.Side.Group...)
 	s.Side.Group = group

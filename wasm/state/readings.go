@@ -15,11 +15,11 @@ import (
 func (s *State) doReadings(a Action) (bool, []Effect) {
 	switch a.Name {
 	case PlaceNext:
-		s.Side.Place = s.freePlace()
+		s.Side.Place, s.Side.stale = s.freePlace(), true
 		s.Message = Message{}
 		return true, append(s.stopMeasuring(), Effect{Kind: Show, Key: "side-grade"})
 	case PlaceTo:
-		s.Side.Place = a.Arg
+		s.Side.Place, s.Side.stale = a.Arg, true
 		return true, append(s.stopMeasuring(), Effect{Kind: Show, Key: "side-grade"})
 	case PlaceName:
 		s.renamePlace(strings.TrimSpace(a.Text), a.Now)
@@ -75,8 +75,8 @@ func (s *State) keepReading(read slope.Reading, now int64) {
 	}
 	s.Own.Readings = append(append([]keep.Reading(nil), s.Own.Readings...), r)
 	s.ownRevision++
-	s.stale = true
-	s.say(Message{Key: words.ReadingKept, Args: []string{s.Side.Place}})
+	s.Side.stale = true
+	s.Message = Message{}
 }
 
 // pitchLength is the pitch's length as it is set [m], with an error by how it
@@ -179,7 +179,6 @@ func (s *State) renamePlace(name string, now int64) {
 	}
 	s.Own.Readings, s.Side.Place = list, name
 	s.ownRevision++
-	s.stale = true
 }
 
 // shortened holds a name or a note to the length that is kept.
@@ -211,7 +210,7 @@ func (s *State) forgetReading(id string) {
 	r := s.Own.Readings[at]
 	s.Own.Readings = without(s.Own.Readings, at)
 	s.ownRevision++
-	s.stale, s.Side.Shown = true, ""
+	s.Side.stale, s.Side.Shown = true, ""
 	s.say(Message{Key: words.KeptForgotten, Args: []string{r.Place + ", " + s.Voice.Grade(r.Grade)}, Undo: true})
 }
 

@@ -18,6 +18,9 @@ func Reduce(prev *State, a Action) (*State, []Effect) {
 	if next.stale {
 		next.answer()
 	}
+	if next.Side.stale {
+		next.consider()
+	}
 	return next, append(effects, storage(prev, next)...)
 }
 

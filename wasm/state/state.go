@@ -221,7 +221,7 @@ func (s *State) offers(l words.Lang) bool {
 // stays and Trouble says why.
 func (s *State) answer() {
 	s.stale = false
-	s.consider()
+	s.Side.stale = true
 	if s.Profile == nil {
 		return
 	}

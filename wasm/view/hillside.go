@@ -33,9 +33,12 @@ func (v *viewer) sideGrade() *Node {
 		El("h2", ID("grade-title"), With("tabindex", "-1"), v.say(words.HeadGrade), Text(": "), Text(v.PitchName())),
 		If(v.ReadHere() > 0, button("plain", state.PlaceNext, "", v.say(words.PlaceNextButton))))
 	read, ok := v.Combined()
+	if v.Side.Way != "" && v.Side.Way != state.WayChoose {
+		return region("section", "side-grade", Bare("hidden")) // one figure at a time
+	}
 	if !ok {
 		return region("section", "side-grade", Class("side-grade"), With("aria-labelledby", "grade-title"), head,
-			If(v.Side.Way == "", El("p", v.say(words.NoGrade))))
+			El("p", v.say(words.NoGrade)))
 	}
 	count := v.Voice.Say(words.ReadOnce) + ", " + v.Method(read.Method)
 	if n := v.ReadHere(); n > 1 {
@@ -57,11 +60,10 @@ func (v *viewer) sideFoot() *Node {
 	t := &v.Side.Tilt
 	switch v.Side.Way {
 	case "":
-		key := words.MeasureButton
-		if v.ReadHere() > 0 {
-			key = words.MeasureAgain
+		if v.ReadHere() == 0 {
+			return region("section", "side-foot", Bare("hidden")) // the ways themselves are offered
 		}
-		do = main(state.Measure, state.WayChoose, key)
+		do = main(state.Measure, state.WayChoose, words.MeasureAgain)
 		if v.Side.Pitch != nil {
 			out = main(state.Tell, "", words.TellButton)
 		}

@@ -253,9 +253,9 @@ func wayPicture(way string) *Node {
 	case state.WayTape: // a level held out, a tape under its low end
 		lines = "M14 22H84V32H14ZM42 27H56M20 32V53M16 37H24M16 43H24M16 49H24"
 	case state.WayWheel: // a wheel at a flight of stairs
-		ground = "M40 62V54H52V46H64V38H76V30H92V62Z"
-		lines = "M38 40A16 16 0 1 1 37.9 40ZM22 40V24M22 40L35 49M22 40L9 49"
-		full = "M25 40A3 3 0 1 1 24.9 40Z"
+		ground = "M4 62V57H40V54H52V46H64V38H76V30H92V62Z"
+		lines = "M22 24A16 16 0 1 1 21.9 24ZM22 40V24M22 40L36 48M22 40L8 48"
+		full = "M22 37A3 3 0 1 1 21.9 37Z"
 	case state.WayRide: // places along the road as they were found
 		full = "M16 51A4 4 0 1 1 15.9 51ZM36 44A4 4 0 1 1 35.9 44ZM56 41A4 4 0 1 1 55.9 41ZM80 31A4 4 0 1 1 79.9 31Z"
 		lines = "M76 27V8L90 13L76 18"

@@ -219,6 +219,5 @@ func (v *viewer) downFigures(d *ride.WayDown) *Node {
 		stop = v.Voice.Say(words.DownNoStopping)
 	}
 	return El("dl", Class("pitch-figures"),
-		El("div", El("dt", v.say(words.DownMostIs)), El("dd", Text(v.Speed(d.MostMps)))),
 		El("div", El("dt", v.say(words.DownStop, v.Speed(v.Question.Ride.DownMps))), El("dd", Text(stop))))
 }

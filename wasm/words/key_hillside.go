@@ -22,11 +22,8 @@ const (
 	ReadMisfit
 	ReadOdd
 
-	// ReadingKept: place.
-	ReadingKept
 	PlaceNextButton
 	PlaceNamed
-	MeasureButton
 	MeasureAgain
 	MeasureStop
 
@@ -147,7 +144,6 @@ const (
 	PitchStays
 	PitchHeld
 	PitchTime
-	DownMostIs
 
 	// DownStop: speed.
 	DownStop
