@@ -157,7 +157,7 @@ func (s *State) freePlace() string {
 	}
 }
 
-// PlaceName gives the pitch's name, or the one that is offered.
+// PitchName gives the pitch's name, or the one that is offered.
 func (s *State) PitchName() string {
 	if s.Side.Place != "" {
 		return s.Side.Place

@@ -154,6 +154,8 @@ func (s *State) WheelReading() (slope.Reading, error) {
 // ReadNow is what the way that is open would read now.
 func (s *State) ReadNow() (slope.Reading, error) {
 	switch s.Side.Way {
+	case WaySight:
+		return slope.Sighted(s.Side.Tilt.Now, s.Offset(slope.RestOf(s.Side.Tilt.Up, slope.LongEdge)))
 	case WayTape:
 		return s.TapeReading()
 	case WayWheel:

@@ -133,7 +133,7 @@ func (s *State) readOnce(now int64) []Effect {
 	var err error
 	switch {
 	case s.Side.Way == WaySight:
-		read, err = slope.Sighted(t.Now, s.Offset(slope.RestOf(t.Up, slope.LongEdge)))
+		read, err = s.ReadNow()
 	case t.Half():
 		read, err = slope.Tilt(t.First, s.Offset(t.rest), s.support())
 	default:

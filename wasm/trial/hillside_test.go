@@ -133,7 +133,7 @@ func TestTiltGranted(t *testing.T) {
 	if !eval[bool](p, `window.askedByTouch`) {
 		t.Error("the permission was not asked for by a touch")
 	}
-	p.until("there is enough to go by", `new Promise(done => setTimeout(() => done(true), 2500))`)
+	p.until("there is enough to go by", `document.querySelector("#side-measure .still") !== null`)
 	p.tap(act("freeze", ""))
 	p.lay(20)
 	p.tap(act("once", ""))

@@ -110,7 +110,9 @@ func (v *viewer) picking(title words.Key, name string, choices ...any) *Node {
 		word := choices[i].(string)
 		row = append(row, v.one(state.Pick, name+"="+word, v.say(choices[i+1].(words.Key)), is == word))
 	}
-	return El("div", Class("one-of"), With("role", "group"), With("aria-label", v.Voice.Say(title)), row)
+	label := capital(v.Voice.Say(title))
+	return El("div", El("p", Class("editor-name"), Text(label)),
+		El("div", Class("one-of"), With("role", "group"), With("aria-label", label), row))
 }
 
 func (v *viewer) sideCautions() *Node {

@@ -162,9 +162,14 @@ func (v *viewer) sight() Part {
 		return v.noTilt()
 	}
 	t := &v.Side.Tilt
+	var sure Part
+	if read, err := v.ReadNow(); err == nil {
+		sure = El("p", Class("still"), Text(v.GradeError(read.PlusMinus())))
+	}
 	return Parts{
 		El("p", v.say(words.SightHow)),
 		v.live(false),
+		sure,
 		If(t.Frozen, El("div", Class("row"), button("plain", state.Freeze, "", v.say(words.SightGoOn)))),
 	}
 }
