@@ -76,6 +76,9 @@ func (s *State) hillside() map[string]string {
 	for i, p := range side.Group {
 		out["group."+strconv.Itoa(i)] = p.Bike + "+" + p.Rider
 	}
+	for i := range min(len(side.Ride.Fixes), mostKept) {
+		out["fix."+strconv.Itoa(i)] = textOf(&side.Ride.Fixes[i])
+	}
 	if t := &side.Tilt; t.Half() {
 		for name, v := range map[string]float64{"mean": float64(t.First.Mean), "error": float64(t.First.Error), "seconds": t.First.Seconds} {
 			out["first."+name] = strconv.FormatFloat(v, 'g', -1, 64)
@@ -107,6 +110,13 @@ func (s *State) restoreHillside(kept map[string]string) {
 		if ok && s.thing(keep.Bike, bike) != nil && s.thing(keep.Rider, rider) != nil {
 			side.Group = append(side.Group, Pair{Bike: bike, Rider: rider})
 		}
+	}
+	for i := range mostKept {
+		f, ok := fixOf(kept["fix."+strconv.Itoa(i)])
+		if !ok {
+			break
+		}
+		side.Ride.Fixes = append(side.Ride.Fixes, f)
 	}
 	side.Tilt.restoreFirst(kept)
 }

@@ -131,6 +131,11 @@ func TestRideIsRecorded(t *testing.T) {
 			AccuracyM: 5, HeightAccuracyM: 3,
 		}})
 	}
+	half, _ := after(t, actions...)
+	again, _ := after(t, Action{Name: Restored, Text: string(keep.EncodeSettings(half.settings()))}, Action{Name: Measure, Arg: WayRide})
+	if len(again.Side.Ride.Fixes) != 40 || again.Side.Ride.Fixes[39] != half.Side.Ride.Fixes[39] {
+		t.Errorf("a reload left %d of 40 fixes", len(again.Side.Ride.Fixes))
+	}
 	s, _ := after(t, append(actions, Action{Name: Read, Now: 1100})...)
 	read, ok := s.Combined()
 	if !ok || math.Abs(float64(read.Grade)-0.1) > 0.02 || read.Error < 0.002 || math.IsNaN(s.Own.Readings[0].At.LatDeg) {

@@ -2,6 +2,8 @@ package state
 
 import (
 	"math"
+	"strconv"
+	"strings"
 
 	"hillwright/physics/hill"
 	"hillwright/physics/slope"
@@ -38,8 +40,9 @@ func (s *State) doStretch(a Action) (bool, []Effect) {
 	return true, nil
 }
 
+// startRide begins to record, or goes on with what a reload has left.
 func (s *State) startRide() []Effect {
-	s.Side.Ride = Recording{}
+	s.Side.Ride = Recording{Fixes: s.Side.Ride.Fixes}
 	return []Effect{{Kind: StartRide}, {Kind: Wake}}
 }
 
@@ -55,6 +58,37 @@ func (s *State) located(f slope.Fix) {
 	r.Fixes = append(append(make([]slope.Fix, 0, len(r.Fixes)+1), r.Fixes...), f)
 	r.Read, r.Err = slope.RideStretch(r.Fixes, slope.Satellite)
 	r.LengthM = r.Read.LengthM
+}
+
+// mostKept is how many fixes are kept over a reload: a pitch takes fewer.
+const mostKept = 300
+
+// textOf writes a fix for the settings, and fixOf reads it.
+func textOf(f *slope.Fix) string {
+	out := ""
+	for i, v := range []float64{f.LatDeg, f.LonDeg, f.HeightM, f.TimeS, f.AccuracyM, f.HeightAccuracyM} {
+		if i > 0 {
+			out += " "
+		}
+		out += strconv.FormatFloat(v, 'g', -1, 64)
+	}
+	return out
+}
+
+func fixOf(text string) (f slope.Fix, ok bool) {
+	parts := strings.Fields(text)
+	into := []*float64{&f.LatDeg, &f.LonDeg, &f.HeightM, &f.TimeS, &f.AccuracyM, &f.HeightAccuracyM}
+	if len(parts) != len(into) {
+		return f, false
+	}
+	for i, part := range parts {
+		v, err := strconv.ParseFloat(part, 64)
+		if err != nil {
+			return f, false
+		}
+		*into[i] = v
+	}
+	return f, true
 }
 
 // startTrack puts the handles around the hardest stretch.

@@ -65,6 +65,7 @@ func (s *State) doTilt(a Action) (bool, []Effect) {
 	case OneReading:
 		return true, s.readOnce(a.Now)
 	case StartOver:
+		s.Side.Ride = Recording{Sensor: s.Side.Ride.Sensor}
 		t.Taking, t.Now, t.First, t.Frozen, t.steady = false, slope.Average{}, slope.Average{}, false, nil
 		s.Side.Err = nil
 	default:

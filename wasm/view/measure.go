@@ -223,6 +223,7 @@ func (v *viewer) recording() Part {
 		v.result(), El("p", v.say(words.RideHow)),
 		El("p", Class("hint"), v.say(words.RideFixes, v.Voice.Number(float64(len(r.Fixes)), 0), v.Voice.Length(r.LengthM))),
 		If(r.Sensor == "lost", El("p", Class("problem"), v.say(words.RideLost))),
+		El("div", Class("row"), button("plain", state.StartOver, "", v.say(words.TiltOver))),
 	}
 }
 
