@@ -59,6 +59,7 @@ func TestDocumentFollowsTheView(t *testing.T) {
 	}
 	skip := map[string]bool{ // they ask the browser for what a test has not
 		state.Print: true, state.Export: true, state.Figures: true, state.PickTrack: true, state.PickImport: true, state.Share: true, state.SaveBroken: true,
+		state.ReadingsCSV: true, state.ReadingsGPX: true, state.Tell: true,
 	}
 	seed := uint32(1)
 	pick := func(n int) int {
