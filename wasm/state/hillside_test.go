@@ -93,7 +93,7 @@ func TestSight(t *testing.T) {
 
 // tape reads a rise of so many steps of half a centimetre over a metre.
 func tape(steps int) []Action {
-	out := []Action{{Name: Measure, Arg: WayTape}, {Name: Pick, Arg: "tape=map"}}
+	out := []Action{{Name: GoTo, Arg: GoHillside}, {Name: Measure, Arg: WayTape}, {Name: Pick, Arg: "tape=map"}}
 	for range steps {
 		out = append(out, Action{Name: DialUp, Arg: DialRise})
 	}

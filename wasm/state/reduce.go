@@ -18,7 +18,7 @@ func Reduce(prev *State, a Action) (*State, []Effect) {
 	if next.stale {
 		next.answer()
 	}
-	if next.Side.stale {
+	if next.Side.stale && next.Side.Open {
 		next.consider()
 	}
 	return next, append(effects, storage(prev, next)...)

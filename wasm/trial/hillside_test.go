@@ -47,12 +47,13 @@ func (p *tab) lay(deg float64) {
 func (p *tab) tape() {
 	p.t.Helper()
 	p.tap(act("measure", "tape"))
+	p.shows("#side-measure", English.Say(words.AwakeNote))
 	p.tap(act("pick", "tape=map"))
 	for range 12 {
 		p.tap(act("dial-up", "dial.rise"))
 	}
 	p.tap(act("read", ""))
-	p.shows("#side-grade", "16.0")
+	p.shows("#side-readings", "16.0")
 }
 
 // TestHillside goes the whole way at the foot of a pitch: by the phone laid
@@ -165,7 +166,7 @@ func TestRecorded(t *testing.T) {
 	p.tap(act("measure", "ride"))
 	for i := range 25 {
 		at(i)
-		p.until(fmt.Sprint("fix ", i), `parseInt(document.querySelector("#side-measure .hint")?.textContent) > $1`, i)
+		p.until(fmt.Sprint("fix ", i), `[...document.querySelectorAll("#side-measure .hint")].some(e => parseInt(e.textContent.split(": ")[1]) > $1)`, i)
 	}
 	p.until("there is a grade", `document.querySelector("#side-measure .huge") !== null`)
 	p.tap(act("read", ""))

@@ -67,7 +67,7 @@ var englishHillside = [keys]string{
 	RideRefused:        "The location was refused. It can be allowed in the browser's settings for this page. Until then measure in another way:",
 	RideAbsent:         "This device gives no location. Measure in another way:",
 	RideLost:           "No location at the moment; what was recorded is kept.",
-	RideFixes:          "{0} fixes, {1}",
+	RideFixes:          "fixes: {0}, {1}",
 	TrackHow:           "{0}: move the two marks to the ends of the pitch.",
 	TrackHeights:       "where its heights come from",
 	ReadUse:            "keep this reading",

@@ -67,7 +67,7 @@ var germanHillside = [keys]string{
 	RideRefused:        "Der Standort wurde abgelehnt. Erlauben lässt er sich in den Einstellungen des Browsers für diese Seite. Bis dahin auf anderem Weg messen:",
 	RideAbsent:         "Dieses Gerät gibt keinen Standort an. Auf anderem Weg messen:",
 	RideLost:           "Im Moment kein Standort; das Aufgezeichnete bleibt.",
-	RideFixes:          "{0} Ortungen, {1}",
+	RideFixes:          "Ortungen: {0}, {1}",
 	TrackHow:           "{0}: die beiden Marken an die Enden des Stücks schieben.",
 	TrackHeights:       "woher die Höhen kommen",
 	ReadUse:            "diese Messung behalten",
