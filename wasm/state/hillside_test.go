@@ -239,3 +239,34 @@ func TestReadings(t *testing.T) {
 		t.Errorf("round trip: %v, %d readings", faults, len(got.Readings))
 	}
 }
+
+// The same pitch of 9° by four ways: together they say 9°, more surely than any
+// of them.
+func TestFourWaysTogether(t *testing.T) {
+	want := math.Tan(9 * math.Pi / 180)
+	actions := []Action{{Name: Measure, Arg: WayTilt}, {Name: Average}, lying(9.4, 1000, 6), {Name: Average}, lying(-8.6, 1010, 6)}
+	actions = append(actions, tape(12)...) // 16 cm over a metre: 15.8, to half a centimetre
+	actions = append(actions, Action{Name: Measure, Arg: WayWheel})
+	rollout := First(shop(), "en").Rollout().Value
+	for range int(math.Round(10*rollout*math.Sin(9*math.Pi/180)/0.17)) - 10 {
+		actions = append(actions, Action{Name: DialUp, Arg: DialStairs})
+	}
+	actions = append(actions, Action{Name: Read, Now: 3000}, Action{Name: Measure, Arg: WayRide})
+	for i := range 60 {
+		along := 4 * float64(i)
+		actions = append(actions, Action{Name: Located, Fix: slope.Fix{
+			Point:     hill.Point{LatDeg: 44 + along/111111, LonDeg: 8, HeightM: 300 + along*want, TimeS: 4000 + 2*float64(i)},
+			AccuracyM: 5, HeightAccuracyM: 3,
+		}})
+	}
+	s, _ := after(t, append(actions, Action{Name: Read, Now: 5000})...)
+	read, ok := s.Combined()
+	if !ok || s.ReadHere() != 4 || read.Misfit || math.Abs(float64(read.Grade)-want) > 2*read.Error {
+		t.Fatalf("four ways: %d readings, %+v, want %.4f", s.ReadHere(), read, want)
+	}
+	for _, r := range s.Own.Readings {
+		if read.Error >= r.Error {
+			t.Errorf("together ± %.4f, by %s alone ± %.4f", read.Error, r.Method, r.Error)
+		}
+	}
+}
