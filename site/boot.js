@@ -6,6 +6,10 @@
 //                     Take them, then set it to null: that ends the recording.
 //   hillwrightShop    the text of shop.json.
 //   hillwrightStartWorker  a function that starts a worker with the same program.
+//   hillwrightDatabase  a function that opens the database of a name and a
+//                     version and gives the request, or null where the browser
+//                     refuses: there even looking at window.indexedDB may throw,
+//                     which the program cannot catch.
 //   hillwrightUpdate  a function that changes to a new build; there is one once
 //                     the window has had the event "hillwright-update".
 "use strict";
@@ -36,6 +40,14 @@
     if (document.getElementById("boot-note")) say();
     else document.addEventListener("DOMContentLoaded", say);
   }
+
+  window.hillwrightDatabase = (name, version) => {
+    try {
+      return window.indexedDB.open(name, version);
+    } catch (refused) {
+      return null;
+    }
+  };
 
   window.hillwrightTaps = [];
   for (const type of ["click", "input"]) {

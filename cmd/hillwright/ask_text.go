@@ -74,7 +74,7 @@ func easing(seconds float64, v words.Voice) string {
 	if math.IsInf(seconds, 1) {
 		return v.Say(words.LabelNever)
 	}
-	return v.Duration(seconds)
+	return v.About(seconds)
 }
 
 // writeDown are the rows of the way down.

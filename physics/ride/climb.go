@@ -38,6 +38,8 @@ func Climb(r *rig.Rig, p *hill.Profile, o Options) (Answer, error) {
 	if o.StepScale == 0 {
 		o.StepScale = 1
 	}
+	// Nobody rides down more slowly than they balance.
+	o.DownMps = math.Max(o.DownMps, r.Rider.HoldMps)
 	t := newTour(r, p, o)
 	t.ride()
 	return t.answer(), nil

@@ -40,6 +40,7 @@ type state struct {
 	atM, timeS, kineticJ float64
 	netN                 float64 // pull less load at the end of the last step
 	bendN                float64 // its change along the last step, per metre
+	slowS                float64 // for how long it has been too slow to balance
 	body                 rig.Body
 	shift                shifter
 	sums                 Energy
@@ -196,17 +197,30 @@ func (s *run) stepM(v float64) float64 {
 	return s.shift.cap(v, s.opt.StepScale*math.Max(0.02, h))
 }
 
+// wobbleS is how long a rider keeps upright below the slowest speed to balance
+// at while it still gains [s]: long enough for a start at startMps2. Common
+// practice, no source.
+const wobbleS = 6.0
+
 // hasStalled tells whether the rig can no longer keep itself up: slower than
-// the slowest speed to balance at, and not gaining. A shift is waited for.
+// the slowest speed to balance at, and not gaining or for too long. A shift is
+// waited for.
 func (s *run) hasStalled(before, after float64) bool {
-	if after <= 1e-6 {
+	if after <= 1e-6 || s.slowS > wobbleS {
 		return true
 	}
 	return after < s.rig.Rider.HoldMps && after <= before && !s.shift.under()
 }
 
+// pedals tells whether the rider pedals at a speed [m/s]: always but where the
+// road drives to the speed that the brakes hold (coast); there they pedal up to
+// half of that speed and then let it run.
+func (s *run) pedals(v float64, coast bool) bool {
+	return !coast || v < math.Max(s.rig.Rider.HoldMps, s.opt.DownMps/2)
+}
+
 func (s *run) running(v float64, now *rig.Now, coast bool) Running {
-	if coast {
+	if !s.pedals(v, coast) {
 		return Running{SpeedMps: v, Gear: s.shift.gear, SetBy: rig.Coasting}
 	}
 	return running(s.rig, v, s.shift.gear, now)

@@ -102,7 +102,7 @@ func (s *shifter) wants(r *rig.Rig, v, aimMps, costs float64, now *rig.Now) (to 
 		return s.gear, false
 	}
 	need, nearer := worthwhile, legs
-	if to == s.from {
+	if to == s.from && aimMps >= v {
 		need, nearer = backAgain, 3*legs
 	}
 	return to, !s.suits(r, v) ||

@@ -95,7 +95,7 @@ func (s *run) charge(f *motor.Flow, dt float64) {
 // relaxes, the legs recover.
 func (s *run) pause(seconds float64) {
 	s.sums.BrakesJ += s.kineticJ // it was stopped by hand, at the top
-	s.kineticJ = 0
+	s.kineticJ, s.slowS = 0, 0
 	s.shift.rest()
 	if seconds <= 0 {
 		return

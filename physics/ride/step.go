@@ -16,7 +16,7 @@ func (s *run) forces(at *Place, now *rig.Now, kineticJ float64, coast bool) forc
 	v := math.Sqrt(2 * math.Max(kineticJ, 0) / r.InertialKg)
 	parts := r.Road.Parts(v, at.sin, at.cos, at.HeadMps, at.CrossMps)
 	f := forces{air: parts.Air, bearings: parts.Bearings}
-	if !coast {
+	if s.pedals(v, coast) {
 		pull := r.PullAt(v, s.shift.gear, now)
 		ease := s.shift.ease()
 		f.rider, f.motor = ease*pull.RiderN, ease*pull.MotorN
@@ -64,6 +64,10 @@ func (s *run) step(at *Place, now *rig.Now, h float64, coast bool) {
 	s.atM += h
 	dt := s.duration(h, v0, middle)
 	s.timeS += dt
+	s.slowS += dt
+	if s.speed() >= s.rig.Rider.HoldMps {
+		s.slowS = 0
+	}
 	s.shift.pass(dt)
 
 	e := &s.sums

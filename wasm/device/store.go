@@ -27,8 +27,12 @@ func databaseName() string {
 // by whether it may clear it.
 func (d *Device) Load(got func(things []byte, settings, storage string)) {
 	refused := func(js.Value) { got(nil, "", "refused") }
+	request := window().Call("hillwrightDatabase", databaseName(), databaseVersion)
+	if request.IsNull() {
+		refused(request)
+		return
+	}
 	opened := try(func() {
-		request := window().Get("indexedDB").Call("open", databaseName(), databaseVersion)
 		request.Call("addEventListener", "upgradeneeded", js.FuncOf(func(js.Value, []js.Value) any {
 			db := request.Get("result")
 			db.Call("createObjectStore", thingsStore)

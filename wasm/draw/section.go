@@ -101,8 +101,8 @@ func Section(p *hill.Profile, a *ride.Answer, size Size, v words.Voice) *dom.Nod
 	return picture("img", "section", v.Say(words.SectionTitle), s.summary(v), size,
 		s.cuts(), low.ordinates.node("ordinate"), s.baseLine().node("base"), s.roadLine().node("road"),
 		low.marks.node("level-mark"), low.labels,
-		marks.bracket.node("bracket"), marks.stake.node("stake"), marks.labels,
-		scale.node(), staffNode(),
+		marks.bracket.node("bracket"), marks.stake.node("stake"), staffNode(), marks.labels,
+		scale.node(),
 		dom.El("rect", dom.Class("touch"), dom.Act("move-staff", ""),
 			dom.With("x", "0"), dom.With("y", "0"), dom.With("width", num(s.size.W)), dom.With("height", num(s.base))),
 	)

@@ -65,7 +65,7 @@ func bandsOf(a *ride.Answer, r *rig.Rig, kept float64, v words.Voice) []band {
 	if whole := r.Endurance.ReserveJ; whole > 0 && len(t.ReserveJ) == n {
 		out = append(out, band{name: v.Say(words.BandLegs), of: t.ReserveJ, high: whole, mark: LowLegs * whole, marked: true,
 			markText: v.Say(words.BandLow, v.Percent(LowLegs)),
-			write: func(j float64) string { return v.Percent(j / whole) }})
+			write:    func(j float64) string { return v.Percent(j / whole) }})
 	}
 	return out
 }

@@ -19,10 +19,17 @@ import (
 // TestStorageRefused opens the page where the browser keeps nothing: it says
 // so and goes on.
 func TestStorageRefused(t *testing.T) {
+	for name, source := range map[string]string{
+		"opening throws": `IDBFactory.prototype.open = () => { throw new DOMException("refused", "SecurityError") }`,
+		"looking throws": `Object.defineProperty(window, "indexedDB", { get() { throw new DOMException("refused", "SecurityError") } })`,
+	} {
+		t.Run(name, func(t *testing.T) { storageRefused(t, source) })
+	}
+}
+
+func storageRefused(t *testing.T, source string) {
 	p := newTab(t, phone, newHost(t, atRoot, false))
-	call(p, page.AddScriptToEvaluateOnNewDocument, page.AddScriptToEvaluateOnNewDocumentParams{
-		Source: `IDBFactory.prototype.open = () => { throw new DOMException("refused", "SecurityError") }`,
-	})
+	call(p, page.AddScriptToEvaluateOnNewDocument, page.AddScriptToEvaluateOnNewDocumentParams{Source: source})
 	p.visit()
 	p.shows("#message", English.Say(words.StorageRefused))
 	p.tap(act("dismiss", ""))

@@ -170,8 +170,8 @@ func TestNotes(t *testing.T) {
 		note   hill.Note
 		en, de string
 	}{
-		{hill.Note{Kind: hill.NoteSpike, Count: 1, AtM: 420}, "Stray point left out, at 420 m.", "Ausreißer weggelassen, bei 420 m."},
-		{hill.Note{Kind: hill.NoteSpike, Count: 3, AtM: 420}, "Stray point left out, 3 times, first at 420 m.", "Ausreißer weggelassen, 3-mal, zuerst bei 420 m."},
+		{hill.Note{Kind: hill.NoteSpike, Count: 1, AtM: 420}, "Stray point or height left out, at 420 m.", "Ausreißer in Ort oder Höhe weggelassen, bei 420 m."},
+		{hill.Note{Kind: hill.NoteSpike, Count: 3, AtM: 420}, "Stray point or height left out, 3 times, first at 420 m.", "Ausreißer in Ort oder Höhe weggelassen, 3-mal, zuerst bei 420 m."},
 		{hill.Note{Kind: hill.NoteGap, Count: 2, AtM: 1500, LengthM: 120}, "Gap bridged by a straight line (120 m), 2 times, first at 1.50 km.", "Lücke gerade überbrückt (120 m), 2-mal, zuerst bei 1,50 km."},
 		{hill.Note{Kind: hill.NoteNoHeights, Count: 900}, "The track has no heights: it is taken as level.", "Der Track hat keine Höhen: er gilt als eben."},
 	} {

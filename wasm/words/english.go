@@ -275,11 +275,11 @@ var englishPage = [keys]string{
 
 	NoteNoHeights:     "The track has no heights: it is taken as level",
 	NoteZeroHeights:   "All heights are zero: it is taken as level",
-	NoteSpike:         "Stray point left out",
+	NoteSpike:         "Stray point or height left out",
 	NoteDuplicate:     "Points at one place joined",
 	NotePause:         "Standing still cut out",
 	NoteGap:           "Gap bridged by a straight line",
-	NoteSegments:      "Segments joined",
+	NoteSegments:      "Between segments nothing was recorded: left out",
 	NoteCoarseHeights: "Heights in whole metres, smoothed",
 	NoteSomeHeights:   "Missing height filled in between its neighbours",
 

@@ -177,3 +177,14 @@ func TestParseNumber(t *testing.T) {
 		}
 	}
 }
+
+func TestAbout(t *testing.T) {
+	for _, row := range []struct {
+		s    float64
+		want string
+	}{{5, "30 s"}, {250, "4 min"}, {266, "4 min 30 s"}, {2415, "40 min"}, {4000, "1 h 5 min"}} {
+		if got := bare(inEnglish.About(row.s)); got != row.want {
+			t.Errorf("about %g s: %q, want %q", row.s, got, row.want)
+		}
+	}
+}

@@ -275,11 +275,11 @@ var germanPage = [keys]string{
 
 	NoteNoHeights:     "Der Track hat keine Höhen: er gilt als eben",
 	NoteZeroHeights:   "Alle Höhen sind null: der Track gilt als eben",
-	NoteSpike:         "Ausreißer weggelassen",
+	NoteSpike:         "Ausreißer in Ort oder Höhe weggelassen",
 	NoteDuplicate:     "Punkte am selben Ort vereint",
 	NotePause:         "Stillstand herausgenommen",
 	NoteGap:           "Lücke gerade überbrückt",
-	NoteSegments:      "Teilstücke verbunden",
+	NoteSegments:      "Zwischen Teilstücken nichts aufgezeichnet: ausgelassen",
 	NoteCoarseHeights: "Höhen nur in ganzen Metern, geglättet",
 	NoteSomeHeights:   "Fehlende Höhe aus den Nachbarn ergänzt",
 

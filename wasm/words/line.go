@@ -39,7 +39,7 @@ func (v Voice) HoldLine(a *ride.Answer) string {
 	case math.IsInf(a.EasingS, 1):
 		return v.Say(HoldsAlways, peak)
 	}
-	return v.Say(HoldsFor, v.Duration(a.EasingS), peak)
+	return v.Say(HoldsFor, v.About(a.EasingS), peak)
 }
 
 // MotorLine says what the motor makes of the pack's power: pull and heat; ""

@@ -90,7 +90,7 @@ func TestLines(t *testing.T) {
 		},
 			"From rest there it does not start: that wants 330 N, and the hot motor allows 290 N. On foot, too, one person does not get it up.", "Aus dem Stand fährt es dort nicht an: dafür braucht es 330 N, und der heiße Motor erlaubt 290 N. Auch zu Fuß bekommt eine Person allein es nicht hinauf."},
 		{func(v Voice) string { return v.HoldLine(&ride.Answer{Energy: works, EasingS: 250, WindingPeakC: 96}) },
-			"At a steady climb of the hardest stretch the motor holds 4 min 10 s from cold, then eases off; on this ride its winding reaches 96 °C.", "Am schwersten Stück hält der Motor aus dem Kalten 4 min 10 s durch, dann nimmt er sich zurück; auf dieser Fahrt wird die Wicklung bis 96 °C warm."},
+			"At a steady climb of the hardest stretch the motor holds 4 min from cold, then eases off; on this ride its winding reaches 96 °C.", "Am schwersten Stück hält der Motor aus dem Kalten 4 min durch, dann nimmt er sich zurück; auf dieser Fahrt wird die Wicklung bis 96 °C warm."},
 		{func(v Voice) string { return v.HoldLine(&ride.Answer{Energy: works, EasingS: inf, WindingPeakC: 60}) },
 			"The motor never eases off on a climb as hard as this; on this ride its winding reaches 60 °C.", "Bei einem solchen Anstieg nimmt sich der Motor nie zurück; auf dieser Fahrt wird die Wicklung bis 60 °C warm."},
 		{func(v Voice) string { return v.HoldLine(&ride.Answer{EasingS: inf}) }, "", ""},

@@ -123,6 +123,19 @@ func (v Voice) Duration(s float64) string {
 	return two(math.Floor(minutes/60), "h", math.Mod(minutes, 60), "min")
 }
 
+// About writes a time [s] no more exactly than a forecast deserves: to half a
+// minute up to ten, to a minute up to the hour, then to five.
+func (v Voice) About(s float64) string {
+	to := 300.0
+	switch {
+	case s < 600:
+		to = 30
+	case s < 3600:
+		to = 60
+	}
+	return v.Duration(math.Max(to, math.Round(s/to)*to))
+}
+
 // Energy writes an energy given in joule as watt-hours.
 func (v Voice) Energy(joule float64) string {
 	wh := joule / joulePerWh
