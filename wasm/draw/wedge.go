@@ -60,7 +60,7 @@ func Marks(section *dom.Node, s Size, act string, args [2]string, names [2]strin
 		section.Add(dom.El("g", dom.With("data-region", "mark-"+args[i]), dom.With("transform", "translate("+num(x[i])+" 0)"),
 			line.node("stake"), flag.node("peg-binds"),
 			dom.El("rect", dom.Class("touch"), dom.Act(act, args[i]), dom.With("role", "img"), dom.With("aria-label", names[i]),
-				dom.With("x", num(side*30-30)), dom.With("y", "0"), dom.With("width", "60"), dom.With("height", num(s.H-40)))))
+				dom.With("x", num(side*34-34)), dom.With("y", "0"), dom.With("width", "68"), dom.With("height", num(s.H-40)))))
 	}
 	return section
 }

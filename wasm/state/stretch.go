@@ -107,12 +107,16 @@ func (s *State) Stretch() (fromM, toM float64) {
 	return min(a, b), max(a, b)
 }
 
+// StretchSize is the size in which the section with its handles is drawn: a
+// small phone's, so that they are large enough for a glove on any screen.
+func StretchSize() draw.Size { return draw.Size{W: 300, H: 200} }
+
 // moveHandle moves a handle to a place in the section.
 func (s *State) moveHandle(which string, x float64) {
 	if s.Profile == nil || s.Answer == nil || which != DialFrom && which != DialTo {
 		return
 	}
-	s.setDial(which, draw.SectionAt(s.Profile, s.Answer, s.SectionSize(), x).AtM)
+	s.setDial(which, draw.SectionAt(s.Profile, s.Answer, StretchSize(), x).AtM)
 }
 
 // TrackReading is the grade between the handles.

@@ -226,6 +226,7 @@ func TestHillsideFits(t *testing.T) {
 			}
 			eval[bool](p, string(axe)+"; true")
 			look := func(state string) {
+				p.until("nothing moves", `document.getAnimations().length === 0`)
 				for _, fault := range eval[[]string](p, lookForFaults) {
 					t.Errorf("%s: %s", state, fault)
 				}
@@ -242,6 +243,7 @@ func TestHillsideFits(t *testing.T) {
 			p.tap(act("group", ""))
 			p.tap(act("group-add", "heavy"))
 			p.tap(act("group-add", "light"))
+			p.until("they are answered", `document.querySelector(".weakest") !== null`)
 			p.tap(`.reading-is`)
 			for _, theme := range []string{"sun", "dusk"} {
 				p.light(theme)
@@ -258,6 +260,8 @@ func TestHillsideFits(t *testing.T) {
 				p.tap(act("measure", way))
 				if way == "tilt" || way == "sight" {
 					p.until("the sensor is heard", `document.querySelector("#side-live") !== null`)
+				} else {
+					p.until("it can be read", `document.querySelector("[data-act=read]") !== null`)
 				}
 				look("measuring by " + way)
 				p.tap(act("measure", ""))

@@ -88,7 +88,7 @@ func (v *viewer) sideFoot() *Node {
 		}
 	}
 	return region("section", "side-foot", Class("side-foot"), With("aria-labelledby", "foot-title"),
-		El("h2", ID("foot-title"), Class("unseen"), v.say(words.HeadMeasure)), do, out)
+		El("h2", ID("foot-title"), Class("unseen"), Text(capital(v.Voice.Say(words.FootName)))), do, out)
 }
 
 // dialStepper is a dial's name over its stepper, all by thumb.

@@ -231,7 +231,7 @@ func (v *viewer) track() Part {
 	if v.Profile == nil || v.Answer == nil {
 		return v.result()
 	}
-	size := v.SectionSize()
+	size := state.StretchSize()
 	from, to := v.Dial(state.DialFrom), v.Dial(state.DialTo)
 	at := func(m float64) float64 { return draw.SectionAtDistance(v.Profile, v.Answer, size, m).X }
 	names := [2]string{capital(v.inputName(state.DialFrom)), capital(v.inputName(state.DialTo))}

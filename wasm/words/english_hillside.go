@@ -17,6 +17,7 @@ var englishHillside = [keys]string{
 	ReadMisfit:         "The readings do not fit together; the error was widened ×{0}.",
 	ReadOdd:            "fits worst",
 	PlaceNextButton:    "next place",
+	FootName:           "what comes next",
 	PlaceNamed:         "name of the place",
 	MeasureAgain:       "measure again",
 	MeasureStop:        "stop measuring",

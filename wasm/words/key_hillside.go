@@ -23,6 +23,7 @@ const (
 	ReadOdd
 
 	PlaceNextButton
+	FootName
 	PlaceNamed
 	MeasureAgain
 	MeasureStop
