@@ -5,10 +5,13 @@
 package build
 
 import (
+	"fmt"
 	"io/fs"
 	"strings"
 
 	"hillwright/build/shop"
+
+	"hillwright/wasm/words"
 )
 
 // Parts is what a page is made of. Site holds the shell, the styles and the
@@ -45,6 +48,9 @@ func Pack(parts Parts, out string) (*Report, error) {
 
 // Assemble makes the page in memory, without the compressed siblings.
 func Assemble(parts Parts) (*Page, error) {
+	if err := words.Check(); err != nil {
+		return nil, fmt.Errorf("the catalogue of words: %w", err)
+	}
 	own := parts.Shop
 	p := &Page{files: map[string]*File{}}
 	names, err := p.addHashed(parts)

@@ -237,3 +237,15 @@ func TestMistakesAllAtOnce(t *testing.T) {
 		}
 	}
 }
+
+// The law may be left to the region; a region that is not known is told.
+func TestRegionGivesTheLaw(t *testing.T) {
+	got, err := Read(folder("shop.toml", strings.Replace(goodSettings, `law = "eu-25"`, `region = "GB"`, 1)))
+	if err != nil || got.Shop.LawID != "gb-15mph" {
+		t.Errorf("in GB the law is %q, %v", got.Shop.LawID, err)
+	}
+	_, err = Read(folder("shop.toml", strings.Replace(goodSettings, `law = "eu-25"`, `region = "Moon"`, 1)))
+	if err == nil || !strings.Contains(err.Error(), "a region whose law is known here") {
+		t.Errorf("on the moon: %v", err)
+	}
+}

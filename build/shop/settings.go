@@ -59,6 +59,8 @@ func (f *settingsReader) read(tree map[string]any) []typedHill {
 			f.shop.Town = f.text(tree, key)
 		case "law":
 			f.shop.LawID = f.oneOf(tree, key, lawIDs())
+		case "region":
+			f.region(tree)
 		case "units":
 			f.shop.Units = f.oneOf(tree, key, []string{"metric", "imperial"})
 		case "languages":
@@ -66,11 +68,15 @@ func (f *settingsReader) read(tree map[string]any) []typedHill {
 		case "rider", "load", "day", "hill":
 			hills = append(hills, f.list(key, tree[key])...)
 		default:
-			f.mistakes.add(f.at("", 0, key).mistake(key, "one of name, town, law, units, languages, [[rider]], [[load]], [[day]], [[hill]]", ""))
+			f.mistakes.add(f.at("", 0, key).mistake(key, "one of name, town, region, law, units, languages, [[rider]], [[load]], [[day]], [[hill]]", ""))
 		}
 	}
 	for _, key := range []string{"name", "law", "units", "languages"} {
-		if _, given := tree[key]; !given {
+		_, given := tree[key]
+		if _, regional := tree["region"]; key == "law" && regional {
+			continue
+		}
+		if !given {
 			f.mistakes.add(Mistake{File: settingsFile, Row: 1, Name: key, Expected: "a line " + key + " = …", Do: "add it above the first [[…]]"})
 		}
 	}
@@ -80,6 +86,21 @@ func (f *settingsReader) read(tree map[string]any) []typedHill {
 		}
 	}
 	return hills
+}
+
+// region takes the law that holds where the shop is, unless it names one.
+func (f *settingsReader) region(tree map[string]any) {
+	id := f.text(tree, "region")
+	laws := rule.ForRegion(id)
+	if len(laws) == 0 {
+		if id != "" {
+			f.mistakes.add(f.at("", 0, "region").mistake(literal(id), "a region whose law is known here: EU, or a country by ISO 3166 such as GB", "or name the law: one of "+strings.Join(lawIDs(), ", ")))
+		}
+		return
+	}
+	if _, named := tree["law"]; !named {
+		f.shop.LawID = laws[0].ID
+	}
 }
 
 func lawIDs() []string {

@@ -153,6 +153,9 @@ func writeBalance(s sheet, b *ride.Balance, v words.Voice) {
 			label = ""
 		}
 		s.row(label, v.Limit(p.Limit)+": "+v.Pull(p.PullN)+", "+v.Headroom(p.Headroom))
+		if i == 0 {
+			s.row("", "("+v.LimitLong(p.Limit)+")")
+		}
 	}
 	s.row(v.Say(words.LabelSteepestHeld), v.Grade(b.SteepestGrade))
 }

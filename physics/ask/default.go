@@ -6,6 +6,7 @@ import (
 	"hillwright/physics/brake"
 	"hillwright/physics/gear"
 	"hillwright/physics/motor"
+	"hillwright/physics/rider"
 	"hillwright/physics/rig"
 	"hillwright/physics/road"
 	"hillwright/physics/unit"
@@ -21,7 +22,9 @@ func Default() Question {
 	q.Rider.MassKg, q.Rider.PowerW = 80, 110
 	q.Rider.CadenceLow, q.Rider.CadenceLiked, q.Rider.CadenceHigh = 45, 70, 100
 	q.Rider.CrankM, q.Rider.HoldMps = 0.17, 1.4
-	q.Rider.CriticalW, q.Rider.ReserveJ = 160, 12000
+	class, _ := rider.ClassByID("steady")
+	legs := class.Endurance(q.Rider.MassKg)
+	q.Rider.CriticalW, q.Rider.ReserveJ = legs.CriticalW, legs.ReserveJ
 	b := &q.Bike
 	b.MassKg, b.Crr, b.CdAM2, b.WheelDragM2, b.WheelInertiaKgM2 = 25, 0.008, 0.55, 0.0044, 0.25
 	b.Tyre, b.RolloutM = gear.Tyre{WidthMM: 47, BeadSeatMM: 622}, nan

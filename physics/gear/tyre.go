@@ -4,11 +4,8 @@ package gear
 
 import "math"
 
-// BeadSeats are the bead-seat diameters [mm] of ISO 5775 that a bike may have.
+// beadSeats are the bead-seat diameters [mm] of ISO 5775 that a bike may have.
 var beadSeats = []int{203, 254, 288, 305, 355, 406, 457, 507, 540, 547, 559, 571, 584, 590, 597, 599, 622, 630, 635}
-
-// BeadSeats gives the bead-seat diameters [mm] of ISO 5775, smallest first.
-func BeadSeats() []int { return append([]int(nil), beadSeats...) }
 
 // Tyre is a tyre by ISO 5775: width and bead-seat diameter [mm], written
 // 47-622.

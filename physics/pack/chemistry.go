@@ -47,14 +47,12 @@ func (c *curve) under(charge float64) float64 {
 // cell is what the cells of one chemistry have in common. openV is the voltage
 // at rest at 25 °C, nominalV what makers multiply by, fullV where charging
 // ends, cutV where the BMS cuts under load [V]. ohmAh is a cell's resistance
-// within seconds times its capacity [Ω·Ah]: a larger cell resists less. cycles
-// is the number of full cycles after which a fifth of the capacity is gone.
+// within seconds times its capacity [Ω·Ah]: a larger cell resists less.
 // All from memory of common data sheets, none from one source.
 type cell struct {
 	openV                 curve
 	nominalV, fullV, cutV float64
 	ohmAh                 float64
-	cycles                float64
 }
 
 var cells = [...]cell{
@@ -63,14 +61,14 @@ var cells = [...]cell{
 			3.10, 3.35, 3.46, 3.52, 3.56, 3.59, 3.615, 3.64, 3.665, 3.69, 3.72,
 			3.755, 3.80, 3.845, 3.89, 3.935, 3.985, 4.03, 4.075, 4.12, 4.18,
 		},
-		nominalV: 3.6, fullV: 4.2, cutV: 3.0, ohmAh: 0.105, cycles: 600,
+		nominalV: 3.6, fullV: 4.2, cutV: 3.0, ohmAh: 0.105,
 	},
 	IronPhosphate: {
 		openV: curve{
 			2.70, 3.05, 3.18, 3.21, 3.235, 3.25, 3.265, 3.275, 3.28, 3.285, 3.29,
 			3.295, 3.30, 3.305, 3.315, 3.325, 3.33, 3.333, 3.336, 3.345, 3.45,
 		},
-		nominalV: 3.2, fullV: 3.65, cutV: 2.5, ohmAh: 0.09, cycles: 1800,
+		nominalV: 3.2, fullV: 3.65, cutV: 2.5, ohmAh: 0.09,
 	},
 }
 

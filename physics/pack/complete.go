@@ -58,11 +58,3 @@ func Complete(nominalWh, nominalV float64, c Chemistry, health float64) (Pack, [
 			Text: "Usual low-voltage cut per cell for the chemistry."},
 	)
 }
-
-// HealthAfter is the usual health, 1 to 0.5, after a number of full cycles: a
-// fifth of the capacity goes within 600 cycles of nickel cells and 1800 of iron
-// phosphate. Common practice, no source; real packs differ by half of the loss
-// either way.
-func HealthAfter(cycles float64, c Chemistry) float64 {
-	return math.Max(0.5, 1-0.2*math.Max(cycles, 0)/cells[c].cycles)
-}

@@ -48,10 +48,3 @@ func TestLargerPackSagsLess(t *testing.T) {
 		last = p.ResistanceOhm
 	}
 }
-
-func TestHealthAfter(t *testing.T) {
-	same(t, "new", HealthAfter(0, Nickel), 1, 0)
-	same(t, "600 cycles", HealthAfter(600, Nickel), 0.8, 1e-12)
-	same(t, "1800 cycles", HealthAfter(1800, IronPhosphate), 0.8, 1e-12)
-	same(t, "for ever", HealthAfter(1e9, Nickel), 0.5, 0)
-}

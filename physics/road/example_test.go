@@ -19,7 +19,7 @@ func ExampleStance_LiftGrade() {
 	s := road.Stand(f, road.Trailer{})
 	gravel, _ := road.GroundByID("gravel-wet")
 	fmt.Printf("lifts at %.0f %%, steers to %.0f %%, slips at %.0f %%\n",
-		100*s.LiftGrade(0), 100*s.LiftGrade(road.SteeringShare().Usual), 100*s.SlideGrade(road.RearDrive, gravel.Mu.Usual))
+		100*s.LiftGrade(0), 100*s.LiftGrade(0.10), 100*s.SlideGrade(road.RearDrive, gravel.Mu.Usual))
 	// Output: lifts at 45 %, steers to 32 %, slips at 41 %
 }
 

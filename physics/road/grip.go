@@ -67,7 +67,7 @@ func slips(share, mu, standingN, by, rollingN float64) float64 {
 // LiftN is the most pull [N at the tyre, ≥ 0] that leaves the front wheel a
 // share [0 to below 1] of what the bike's two wheels bear, on a road whose
 // angle has the given cosine; rollingN as in GripN. Share 0 is the lift
-// itself; to steer a bike needs SteeringShare. +Inf where no pull lifts it.
+// itself; to steer a bike needs about a tenth (common practice, no source). +Inf where no pull lifts it.
 func (s *Stance) LiftN(share, cos, rollingN float64) float64 {
 	spare, loss := s.lift(share)
 	if loss <= 0 {
@@ -117,7 +117,3 @@ func steepest(holdN, asksN float64) unit.Grade {
 	}
 	return unit.Grade(holdN / asksN)
 }
-
-// SteeringShare is the least share of a bike's weight on its front wheel with
-// which it still steers uphill. Common practice, no source.
-func SteeringShare() unit.Band { return unit.Band{Low: 0.05, Usual: 0.10, High: 0.15} }

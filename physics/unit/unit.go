@@ -56,9 +56,3 @@ func (s Speed) KMH() float64 { return float64(s) * 3.6 }
 
 // MPH gives the speed in miles per hour.
 func (s Speed) MPH() float64 { return float64(s) * 3600 / MetresPerMile }
-
-// FromKMH makes a speed of kilometres per hour.
-func FromKMH(v float64) Speed { return Speed(v / 3.6) }
-
-// FromMPH makes a speed of miles per hour.
-func FromMPH(v float64) Speed { return Speed(v * MetresPerMile / 3600) }

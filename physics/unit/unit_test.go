@@ -15,8 +15,8 @@ func TestKnownValues(t *testing.T) {
 		{"100 % is 45°", Grade(1).Angle().Degrees(), 45},
 		{"sine of 100 %", Grade(1).Sin(), math.Sqrt2 / 2},
 		{"0 °C", Celsius(0).Kelvin(), 273.15},
-		{"15.5 mph in km/h (SI 2015/24)", FromMPH(15.5).KMH(), 24.944832},
-		{"36 km/h", float64(FromKMH(36)), 10},
+		{"15.5 mph in km/h (SI 2015/24)", Speed(15.5 * MetresPerMile / 3600).KMH(), 24.944832},
+		{"10 m/s in km/h", Speed(10).KMH(), 36},
 		{"10 m/s in mph", Speed(10).MPH(), 22.36936292},
 	} {
 		if math.Abs(row.got-row.want) > 1e-8 {

@@ -74,8 +74,6 @@ func TestQuantities(t *testing.T) {
 		{"grade down", func(v Voice) string { return v.Grade(-0.05) }, "−5.0 %", "−5,0 %", "−5.0 %"},
 		{"power", func(v Voice) string { return v.Power(249.6) }, "250 W", "250 W", "250 W"},
 		{"pull", func(v Voice) string { return v.Pull(210) }, "210 N", "210 N", "47.2 lbf"},
-		{"torque", func(v Voice) string { return v.Torque(65) }, "65 N·m", "65 N·m", "48 lbf·ft"},
-		{"torque, small", func(v Voice) string { return v.Torque(7.5) }, "7.5 N·m", "7,5 N·m", "5.5 lbf·ft"},
 		{"temperature", func(v Voice) string { return v.Temperature(8) }, "8 °C", "8 °C", "46 °F"},
 		{"temperature, cold", func(v Voice) string { return v.Temperature(-20) }, "−20 °C", "−20 °C", "−4 °F"},
 		{"energy", func(v Voice) string { return v.Energy(36 * 3600) }, "36 Wh", "36 Wh", "36 Wh"},
@@ -111,7 +109,7 @@ func TestWhatIsNoNumberIsADash(t *testing.T) {
 		for _, v := range []Voice{{}, {Lang: German, Units: Imperial, Comma: true}} {
 			for i, got := range []string{
 				v.Number(x, 1), v.Speed(x), v.Length(x), v.Height(x), v.Mass(x), v.Grade(unit.Grade(x)), v.Power(x),
-				v.Pull(x), v.Torque(x), v.Temperature(unit.Celsius(x)), v.Duration(x), v.Energy(x), v.Percent(x),
+				v.Pull(x), v.Temperature(unit.Celsius(x)), v.Duration(x), v.Energy(x), v.Percent(x),
 				v.Cadence(x), v.Headroom(x), v.Entry("bike.mass_kg", x), v.Value("bike.mass_kg", x),
 			} {
 				if got != "–" {

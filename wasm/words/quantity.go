@@ -80,14 +80,6 @@ func (v Voice) Pull(n float64) string {
 	return v.with(v.Number(n, 0), "N")
 }
 
-// Torque writes a torque [N·m] in N·m or lbf·ft.
-func (v Voice) Torque(nm float64) string {
-	if v.Units == Imperial {
-		return v.with(v.short(nm/newtonMetrePerLF, decimals(nm/newtonMetrePerLF, step{10, 1})), "lbf·ft")
-	}
-	return v.with(v.short(nm, decimals(nm, step{10, 1})), "N·m")
-}
-
 // Temperature writes a temperature in whole °C or °F.
 func (v Voice) Temperature(c unit.Celsius) string {
 	if v.Units == Imperial {

@@ -40,6 +40,7 @@ func rigOf(t *testing.T, kind motor.Kind, law string, level int) *rig.Rig {
 func rigWith(t *testing.T, set ...string) *rig.Rig {
 	t.Helper()
 	q := ask.Default()
+	q.Rider.CriticalW, q.Rider.ReserveJ = 160, 12000
 	for _, s := range set {
 		path, value, _ := strings.Cut(s, "=")
 		if err := q.Set(path, value); err != nil {
