@@ -1,6 +1,10 @@
 package state
 
-import "math"
+import (
+	"math"
+
+	"hillwright/wasm/words"
+)
 
 // Dials: what a thumb sets while measuring. They go by path like inputs, and
 // are shown and stepped like them (package words).
@@ -42,21 +46,44 @@ func (s *State) Dial(path string) float64 {
 	return dialRanges[path].first
 }
 
+// TapeUnits is the choice of the tape's units.
+const TapeUnits = "tape-units"
+
+// unitWords are the words of TapeUnits.
+var unitWords = map[words.Units]string{words.Metric: "metric", words.Imperial: "imperial"}
+
+// TapeUnit is the units in which level and tape are read: those of the tape at
+// hand, the page's own until someone chooses.
+func (s *State) TapeUnit() string { return s.Picked(TapeUnits, unitWords[s.Voice.Units]) }
+
+// DialVoice is the voice in which a dial is shown and turned.
+func (s *State) DialVoice(path string) words.Voice {
+	v := s.Voice
+	if path == DialRise || path == DialSpan {
+		v.Units = words.Metric
+		if s.TapeUnit() == unitWords[words.Imperial] {
+			v.Units = words.Imperial
+		}
+	}
+	return v
+}
+
 // turnDial moves a dial to the next round value in the unit shown. What a dial
 // counts changes the pitch's length with it.
 func (s *State) turnDial(path string, sign float64) {
-	size, limits := s.Voice.Step(path), dialRanges[path]
+	voice, limits := s.DialVoice(path), dialRanges[path]
+	size := voice.Step(path)
 	if !(size > 0) {
 		return
 	}
 	const off = 1e-6
-	steps := s.Voice.Show(path, s.Dial(path)) / size
+	steps := voice.Show(path, s.Dial(path)) / size
 	if sign > 0 {
 		steps = math.Floor(steps+off) + 1
 	} else {
 		steps = math.Ceil(steps-off) - 1
 	}
-	s.setDial(path, min(max(s.Voice.FromShown(path, steps*size), limits.low), limits.high))
+	s.setDial(path, min(max(voice.FromShown(path, steps*size), limits.low), limits.high))
 }
 
 func (s *State) setDial(path string, v float64) {
@@ -71,7 +98,8 @@ func (s *State) setDial(path string, v float64) {
 // half is the error of a value that was set to the nearest step of its dial,
 // 1 σ: 0.3 of the step (a uniform distribution: 1/√12).
 func (s *State) half(path string) float64 {
-	return 0.3 * math.Abs(s.Voice.FromShown(path, s.Voice.Step(path))-s.Voice.FromShown(path, 0))
+	voice := s.DialVoice(path)
+	return 0.3 * math.Abs(voice.FromShown(path, voice.Step(path))-voice.FromShown(path, 0))
 }
 
 // Picked gives which of a few was chosen: the first until someone chooses.

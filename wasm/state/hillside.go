@@ -68,9 +68,9 @@ type Pitch struct {
 	Answer    *ride.Answer
 }
 
-// rollingMps is the speed of a run-up to a pitch [m/s]: 10 km/h. Common
+// RollingMps is the speed of a run-up to a pitch [m/s]: 10 km/h. Common
 // practice, no source.
-const rollingMps = 10 / 3.6
+const RollingMps = 10 / 3.6
 
 // goTo opens the hillside or the sentence.
 func (s *State) goTo(place string) []Effect {
@@ -191,7 +191,7 @@ func (s *State) consider() {
 // pitchOf answers a question for a pitch of one grade, at the grade and at both
 // ends of its 90 % interval; nil where the inputs give no answer.
 func pitchOf(q ask.Question, read slope.Combined, lengthM float64) *Pitch {
-	q.Ride.StartMps, q.Ride.Back, q.Ride.Trips = rollingMps, false, 1
+	q.Ride.StartMps, q.Ride.Back, q.Ride.Trips = RollingMps, false, 1
 	low, high := read.Interval90()
 	p := &Pitch{Read: read, LengthM: lengthM}
 	word := func(g float64) (w words.Word, r *rig.Rig, a *ride.Answer) {

@@ -270,3 +270,20 @@ func TestFourWaysTogether(t *testing.T) {
 		}
 	}
 }
+
+// A tape in inches on a page in metres: the dials turn by its quarter inches,
+// and the reading is the same grade.
+func TestTapeInItsOwnUnits(t *testing.T) {
+	s, _ := after(t, Action{Name: GoTo, Arg: GoHillside}, Action{Name: Measure, Arg: WayTape}, Action{Name: Pick, Arg: "tape=map"},
+		Action{Name: Pick, Arg: TapeUnits + "=imperial"}, Action{Name: DialUp, Arg: DialRise})
+	if got, want := s.Dial(DialRise), 4.0*0.0254; math.Abs(got-want) > 1e-9 {
+		t.Errorf("from 10 cm a quarter inch up is %.5f m, want %.5f", got, want)
+	}
+	if s.DialVoice(DialLength).Units != s.Voice.Units {
+		t.Error("the tape's units change other dials")
+	}
+	read, err := s.TapeReading()
+	if err != nil || math.Abs(float64(read.Grade)-0.1016) > 1e-4 {
+		t.Errorf("4 in over a metre is %v, %v", read.Grade, err)
+	}
+}

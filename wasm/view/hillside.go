@@ -98,7 +98,7 @@ func (v *viewer) dialStepper(path string) *Node {
 		El("p", Class("editor-name"), Text(capital(name))),
 		El("div", Class("stepper"),
 			button("step", state.DialDown, path, With("aria-label", v.Voice.Say(words.StepDown, name)), Text("−")),
-			El("output", Class("stepper-shown"), Text(v.Voice.Value(path, v.Dial(path)))),
+			El("output", Class("stepper-shown"), Text(v.DialVoice(path).Value(path, v.Dial(path)))),
 			button("step", state.DialUp, path, With("aria-label", v.Voice.Say(words.StepUp, name)), Text("+"))))
 }
 

@@ -191,8 +191,18 @@ func (v *viewer) tape() Part {
 	return Parts{
 		v.result(), El("p", v.say(how)),
 		v.picking(words.TapeName, "tape", "level", words.TapeLevel, "road", words.TapeRoad, "map", words.TapeMap),
+		v.units(),
 		v.dialStepper(state.DialRise), v.dialStepper(state.DialSpan),
 	}
+}
+
+// units are those of the tape at hand.
+func (v *viewer) units() *Node {
+	is, label := v.TapeUnit(), capital(v.Voice.Say(words.SetUnits))
+	return El("div", El("p", Class("editor-name"), Text(label)),
+		El("div", Class("one-of"), With("role", "group"), With("aria-label", label),
+			v.one(state.Pick, state.TapeUnits+"=metric", v.say(words.SetMetric), is == "metric"),
+			v.one(state.Pick, state.TapeUnits+"=imperial", v.say(words.SetImperial), is == "imperial")))
 }
 
 func (v *viewer) wheel() Part {

@@ -25,7 +25,7 @@ func (v *viewer) sidePitch() *Node {
 		v.trouble(),
 		El("div", With("aria-live", "polite"),
 			El("p", Class("word"), wordShape(p.Word), Text(v.Voice.Word(p.Word))),
-			El("p", Class("pitch-means"), Text(v.Means(p.Rig, p.Answer, p.Word, low, high, p.LengthM))),
+			El("p", Class("pitch-means"), Text(v.Means(p.Rig, p.Answer, p.Word, low, high, p.LengthM, state.RollingMps))),
 			If(p.Word != words.Again && p.Straddles(), El("p", Class("problem"), v.say(words.StraddleStart)))),
 		v.who(),
 		v.pitchAsks(),

@@ -46,15 +46,15 @@ func ToneOf(w Word) string {
 
 // Means says in one sentence what a word means here: low and high are the ends
 // of the 90 % interval, lengthM the pitch's length [m].
-func (v Voice) Means(r *rig.Rig, a *ride.Answer, w Word, low, high unit.Grade, lengthM float64) string {
+func (v Voice) Means(r *rig.Rig, a *ride.Answer, w Word, low, high unit.Grade, lengthM, rollingMps float64) string {
 	switch w {
 	case Go:
 		return v.text(MeansGo)
 	case Rolling:
 		if len(r.Gears) == 1 {
-			return v.text(MeansRollingOne)
+			return v.Say(MeansRollingOne, v.Speed(rollingMps))
 		}
-		return v.Say(MeansRolling, v.Gear(r, a.Hardest.Running.Gear))
+		return v.Say(MeansRolling, v.Gear(r, a.Hardest.Running.Gear), v.Speed(rollingMps))
 	case Again:
 		return v.Say(MeansAgain, v.Grade(low), v.Grade(high))
 	}

@@ -119,7 +119,7 @@ const (
 	WordAgain
 	MeansGo
 
-	// MeansRolling: gear.
+	// MeansRolling: gear, speed of the run-up. MeansRollingOne: that speed.
 	MeansRolling
 	MeansRollingOne
 
