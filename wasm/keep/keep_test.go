@@ -23,7 +23,7 @@ func anyThings() *rapid.Generator[Things] {
 		}
 		for i := rapid.IntRange(0, 3).Draw(t, "hills"); i > 0; i-- {
 			h := Hill{ID: word.Draw(t, "id"), Names: map[string]string{"de": word.Draw(t, "name")}, EdgeM: []float64{0}, HeightKnown: rapid.Bool().Draw(t, "known"), Changed: 7}
-			h.HeightM = []float64{rapid.Float64Range(-100, 4000).Draw(t, "foot")}
+			h.HeightM = []float64{rapid.Float64Range(1900, 4000).Draw(t, "foot")}
 			for n := rapid.IntRange(1, 5).Draw(t, "pieces"); n > 0; n-- {
 				last := len(h.EdgeM) - 1
 				d := rapid.Float64Range(1, 500).Draw(t, "length")
