@@ -7,6 +7,7 @@ import (
 	"hillwright/physics/ride"
 	"hillwright/physics/rig"
 	"hillwright/physics/slope"
+	"hillwright/wasm/keep"
 	"hillwright/wasm/words"
 )
 
@@ -179,11 +180,17 @@ func (s *State) consider() {
 		if bike == nil || rider == nil {
 			continue
 		}
-		q.Bike, q.Rider = ask.Default().Bike, ask.Default().Rider
 		q.Source = map[string]ask.Source{}
+		// The chosen bike and rider stand as they are now, changes included.
 		// Values that do not fit are left out, as where things are chosen.
-		_ = bike.Put(&q)
-		_ = rider.Put(&q)
+		if group[i].Bike != s.Chosen[keep.Bike] {
+			q.Bike = ask.Default().Bike
+			_ = bike.Put(&q)
+		}
+		if group[i].Rider != s.Chosen[keep.Rider] {
+			q.Rider = ask.Default().Rider
+			_ = rider.Put(&q)
+		}
 		group[i].Pitch = pitchOf(q, read, lengthM)
 	}
 }

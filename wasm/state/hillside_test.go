@@ -287,3 +287,15 @@ func TestTapeInItsOwnUnits(t *testing.T) {
 		t.Errorf("4 in over a metre is %v, %v", read.Grade, err)
 	}
 }
+
+// Who is chosen stands in the group with the changes that are not kept yet.
+func TestGroupHasTheChosenAsTheyAre(t *testing.T) {
+	s, _ := after(t, append(tape(12), Action{Name: GroupAdd, Arg: "steady"})...)
+	before := s.Side.Group[0].Pitch.Answer.Balance.Headroom()
+	for range 20 {
+		s, _ = Reduce(s, Action{Name: StepUp, Arg: "rider.mass_kg"})
+	}
+	if now := s.Side.Group[0].Pitch.Answer.Balance.Headroom(); now >= before {
+		t.Errorf("headroom %v with 20 kg more, %v before", now, before)
+	}
+}
