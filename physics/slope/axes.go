@@ -55,7 +55,7 @@ const stillMps2 = 0.5
 // UpOfAcceleration gives up from the acceleration including gravity of a
 // DeviceMotion event [m/s²]: at rest it points up, z is +9.8 with the phone on
 // its back (W3C, as above, section 4.3). Some systems give it the other way
-// round; GravitySign tells. still is false when its size is not that of
+// round. still is false when its size is not that of
 // gravity, because the phone is being moved; ok is false when there is none.
 func UpOfAcceleration(x, y, z float64) (up Up, still, ok bool) {
 	size := math.Sqrt(x*x + y*y + z*z)
@@ -65,26 +65,7 @@ func UpOfAcceleration(x, y, z float64) (up Up, still, ok bool) {
 	return Up{x / size, y / size, z / size}, math.Abs(size-unit.Gravity) <= stillMps2, true
 }
 
-// GravitySign tells from both kinds of events at one moment whether the
-// acceleration points up as the standard says (+1) or down (−1): the factor for
-// x, y and z.
-func GravitySign(orientation, acceleration Up) float64 {
-	if orientation.X*acceleration.X+orientation.Y*acceleration.Y+orientation.Z*acceleration.Z < 0 {
-		return -1
-	}
-	return 1
-}
-
-// OnScreen gives up along the axes of what the screen shows: X to its right, Y
-// to its top. angleDeg is the screen's orientation angle [°]: 0 as the phone is
-// built, 90 with its top edge to the left.
-func (u Up) OnScreen(angleDeg float64) Up {
-	s, c := sincosDeg(angleDeg)
-	return Up{u.X*c - u.Y*s, u.X*s + u.Y*c, u.Z}
-}
-
-// Edge is an edge of the phone, or of its screen after OnScreen, and the
-// direction in which its rise counts.
+// Edge is an edge of the phone, and the direction in which its rise counts.
 type Edge uint8
 
 // The edges.
@@ -102,12 +83,6 @@ func (u Up) Angle(e Edge) unit.Angle {
 		along, side = u.X, u.Y
 	}
 	return unit.Angle(math.Atan2(along, math.Hypot(side, u.Z)))
-}
-
-// Lean is how far the screen is from standing upright, 0 to 90°: held on edge
-// for sighting it should be small.
-func (u Up) Lean() unit.Angle {
-	return unit.Angle(math.Atan2(math.Abs(u.Z), math.Hypot(u.X, u.Y)))
 }
 
 // sincosDeg is exact at whole quarter turns.

@@ -112,9 +112,3 @@ func (v Voice) fault(f keep.Fault) string {
 	}
 	return v.Say(FaultLeftOut, f.Where, f.Detail)
 }
-
-// Imported tells what reading a file of saved things did.
-func (v Voice) Imported(m keep.Merged) string {
-	count := func(n int) string { return v.Number(float64(n), 0) }
-	return v.Say(ImportSummary, count(m.Added), count(m.Replaced), count(m.Same), count(m.Older))
-}
