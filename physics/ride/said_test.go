@@ -156,3 +156,23 @@ func TestSlowWayDownIsNoStall(t *testing.T) {
 		t.Errorf("stalled %v, footed %v on the way down", a.Stalled, a.Footed)
 	}
 }
+
+// Where the road drives, the rider pedals up to half of the speed that the
+// brakes hold and then lets it run.
+func TestLetsItRunDownhill(t *testing.T) {
+	r := trekking().rig()
+	o := usual
+	o.StartMps = o.DownMps * 0.6
+	if a, _ := Climb(r, made(400, -8), o); a.Energy.RiderJ != 0 || a.Energy.MotorJ != 0 || a.Hardest.Running.SetBy != rig.Coasting {
+		t.Errorf("coming fast: rider %v J, motor %v J, %v", a.Energy.RiderJ, a.Energy.MotorJ, a.Hardest.Running.SetBy)
+	}
+	a, _ := Climb(r, made(400, -8), usual)
+	if a.Energy.RiderJ <= 0 {
+		t.Error("from rest nobody pedals")
+	}
+	for i, v := range a.Trace.SpeedMps {
+		if w := a.Trace.RiderW[i]; v > 0.55*o.DownMps && w != 0 {
+			t.Errorf("still pedals %v W at %.1f m/s", w, v)
+		}
+	}
+}
