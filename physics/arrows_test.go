@@ -9,8 +9,8 @@ import (
 // floors are the packages of the computation, lowest first: a package may know
 // those of lower floors only.
 var floors = map[string]int{
-	"unit": 0, "air": 1, "gear": 1, "rider": 1, "motor": 1, "pack": 1, "brake": 1, "assume": 0,
-	"road": 2, "rule": 2, "rig": 3, "hill": 3, "ride": 4, "ask": 5, "slope": 5,
+	"unit": 0, "sound": 1, "click": 1, "synth": 1, "air": 1, "gear": 1, "rider": 1, "motor": 1, "pack": 1, "brake": 1, "assume": 0,
+	"road": 2, "rule": 2, "rig": 3, "hill": 3, "coast": 3, "ride": 4, "ask": 5, "slope": 5,
 }
 
 // banned are what the computation must not know, with the reason.
