@@ -10,23 +10,18 @@ import (
 	"os"
 	"strings"
 
-	"hillwright/build/shop"
 	"hillwright/physics/ask"
 	"hillwright/physics/hill"
 	"hillwright/physics/unit"
-	"hillwright/site"
 	"hillwright/wasm/keep"
 	"hillwright/wasm/words"
 )
 
 // askOptions are the command line of `hillwright ask`.
 type askOptions struct {
-	bike, rider, load, day string
-	hill, grade            string
-	shopDir                string
-	lang, units            string
-	sets                   []string
-	json, inputs           bool
+	parts
+	hill, grade  string
+	json, inputs bool
 }
 
 // runAsk answers a question in the terminal. It gives the process's exit code:
@@ -35,21 +30,11 @@ func runAsk(args []string, out, errs io.Writer) int {
 	var o askOptions
 	f := flag.NewFlagSet("ask", flag.ContinueOnError)
 	f.SetOutput(errs)
-	f.StringVar(&o.bike, "bike", "", "a bike of the shop, by its `id` (default: the shop's first)")
-	f.StringVar(&o.rider, "rider", "", "a rider of the shop, by its `id` (default: the shop's first)")
-	f.StringVar(&o.load, "load", "", "a load of the shop, by its `id` (default: the shop's first)")
-	f.StringVar(&o.day, "day", "", "a day of the shop, by its `id` (default: the shop's first)")
+	o.parts.flags(f)
 	f.StringVar(&o.hill, "hill", "", "a track file, a hill of the shop by its id, or `sections` such as 400m@7%,60m@18% (default: the shop's first hill)")
 	f.StringVar(&o.grade, "grade", "", "a `grade` such as 12% instead of a hill: the steady state")
-	f.StringVar(&o.shopDir, "shop", "", "the `folder` of a shop (default: the demo shop)")
-	f.StringVar(&o.lang, "lang", "en", "language of the answer, `en or de`")
-	f.StringVar(&o.units, "units", "metric", "units of the answer, `metric or imperial`")
 	f.BoolVar(&o.json, "json", false, "answer as JSON, every value with its unit in the key")
 	f.BoolVar(&o.inputs, "inputs", false, "print every input with its value, unit, band and source; with -json as JSON")
-	f.Func("set", "override an input by its path, `PATH=VALUE`; may be given again", func(s string) error {
-		o.sets = append(o.sets, s)
-		return nil
-	})
 	f.Usage = func() {
 		fmt.Fprint(errs, "usage: hillwright ask [-bike ID] [-rider ID] [-load ID] [-day ID] [-hill FILE.gpx|ID|SECTIONS | -grade 12%] [-set PATH=VALUE …] [-inputs] [-json]\n\n")
 		f.PrintDefaults()
@@ -76,11 +61,7 @@ func (o *askOptions) answer(out io.Writer) error {
 	if err != nil {
 		return err
 	}
-	folder := site.DemoShop()
-	if o.shopDir != "" {
-		folder = os.DirFS(o.shopDir)
-	}
-	copied, err := shop.Read(folder)
+	copied, err := o.shop()
 	if err != nil {
 		return err
 	}
@@ -95,70 +76,6 @@ func (o *askOptions) answer(out io.Writer) error {
 		return o.steady(out, &q, voice)
 	}
 	return o.climb(out, &q, &copied.Shop, voice)
-}
-
-func voiceOf(lang, units string) (words.Voice, error) {
-	var v words.Voice
-	switch lang {
-	case "en":
-	case "de":
-		v.Lang, v.Comma = words.German, true
-	default:
-		return v, fmt.Errorf("-lang %q is not known; expected en or de", lang)
-	}
-	switch units {
-	case "metric":
-	case "imperial":
-		v.Units = words.Imperial
-	default:
-		return v, fmt.Errorf("-units %q is not known; expected metric or imperial", units)
-	}
-	return v, nil
-}
-
-// question puts the chosen things together and overrides what -set says.
-func (o *askOptions) question(s *keep.Shop) (ask.Question, error) {
-	q := ask.Default()
-	if err := q.Set("ride.law", s.LawID); err != nil {
-		return q, err
-	}
-	for _, choice := range []struct {
-		kind keep.Kind
-		id   string
-	}{{keep.Bike, o.bike}, {keep.Rider, o.rider}, {keep.Load, o.load}, {keep.Day, o.day}} {
-		thing, err := pick(s, choice.kind, choice.id)
-		if err != nil {
-			return q, err
-		}
-		if err := thing.Put(&q); err != nil {
-			return q, fmt.Errorf("%s %s: %w", choice.kind, thing.ID, err)
-		}
-	}
-	for _, set := range o.sets {
-		path, value, ok := strings.Cut(set, "=")
-		if !ok {
-			return q, fmt.Errorf("-set %s: expected PATH=VALUE, such as rider.mass_kg=82", set)
-		}
-		if err := q.Set(strings.TrimSpace(path), value); err != nil {
-			return q, fmt.Errorf("-set %w", err)
-		}
-	}
-	return q, nil
-}
-
-// pick finds a thing of the shop, the first of its kind when id is empty.
-func pick(s *keep.Shop, kind keep.Kind, id string) (keep.Thing, error) {
-	var ids []string
-	for _, t := range s.Things {
-		if t.Kind != kind {
-			continue
-		}
-		if id == "" || t.ID == id {
-			return t, nil
-		}
-		ids = append(ids, t.ID)
-	}
-	return keep.Thing{}, fmt.Errorf("-%s %q: the shop has no such %s; it has %s", kind, id, kind, strings.Join(ids, ", "))
 }
 
 // road finds the hill that -hill means.

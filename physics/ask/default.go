@@ -45,5 +45,9 @@ func Default() Question {
 		Level: highestLevel, DownMps: 25 / 3.6, LawID: "eu-25", Charge: 1, ChargeKept: 0.15, Trips: 1,
 		SightM: road.SightM().Usual, ReactS: road.ReactionS().Usual,
 	}
+	q.Coast = Coast{
+		ClicksPerTurn: nan, CircumferenceM: nan, MassKg: nan, MassErrorKg: nan, Grade: nan, GradeError: nan,
+		WindErrorMps: 0.5, RolledTurns: 5,
+	}
 	return q
 }

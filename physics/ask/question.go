@@ -10,13 +10,15 @@ import (
 	"hillwright/physics/rig"
 )
 
-// Question is everything that is asked about, save the hill.
+// Question is everything that is asked about, save the hill. Coast is for
+// coast-downs only: no answer about a hill looks at it.
 type Question struct {
 	Bike  rig.Bike
 	Rider rider.Rider
 	Load  rig.Load
 	Day   rig.Day
 	Ride  Ride
+	Coast Coast
 	// Source says where inputs came from that differ from the catalogue's
 	// default, by path.
 	Source map[string]Source

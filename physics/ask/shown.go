@@ -52,6 +52,10 @@ func (q *Question) Shown(path string, r *rig.Rig) (s Shown, ok bool) {
 		s.Reason, s.Because = a.Reason, a.Text
 		return s, true
 	}
+	if strings.HasPrefix(path, "coast.") {
+		q.showCoast(&s, path)
+		return s, true
+	}
 	if in.Blank == classDefault {
 		s.Text = "" // the bike has no motor: there is nothing to assume
 		return s, true

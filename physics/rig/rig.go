@@ -113,7 +113,7 @@ func New(b Bike, r rider.Rider, cargo Load, d Day, law rule.Law, level int, alti
 		Crr:           b.Crr,
 		DragM2:        b.CdAM2 + cargo.CdAM2,
 		WheelDragM2:   b.WheelDragM2,
-		DensityKgM3:   density(d, altitudeM),
+		DensityKgM3:   d.Density(altitudeM),
 		BearingFactor: 1,
 	}
 	g.crank = make([]float64, len(g.Gears))
@@ -161,7 +161,9 @@ func prefix(list []assume.Value, path string) {
 	}
 }
 
-func density(d Day, altitudeM float64) float64 {
+// Density is the air's density on the day [kg/m³], at a place whose altitude is
+// altitudeM [m] when the day does not give one.
+func (d *Day) Density(altitudeM float64) float64 {
 	if !math.IsNaN(d.DensityKgM3) {
 		return d.DensityKgM3
 	}
