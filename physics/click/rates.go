@@ -36,6 +36,7 @@ type rates struct {
 	power     [2][]float64
 	best      []float64
 	slow      []float64
+	warps     [2][][]sample
 }
 
 func newRates(envelopeHz float64) rates {
@@ -50,6 +51,11 @@ func newRates(envelopeHz float64) rates {
 	r.re, r.im = make([]float64, size), make([]float64, size)
 	r.power[0], r.power[1] = make([]float64, size/2), make([]float64, size/2)
 	r.best, r.slow = make([]float64, len(r.grid)), make([]float64, len(r.grid))
+	for i, factor := range []int{1, slowFactor} {
+		for _, chirp := range chirps[i] {
+			r.warps[i] = append(r.warps[i], newWarp(envelopeHz, factor, chirp))
+		}
+	}
 	return r
 }
 
@@ -100,9 +106,9 @@ func (r *rates) salience(onset []uint8, at, factor int, out []float64) {
 	for i := range out {
 		out[i] = math.Inf(-1)
 	}
-	list := chirps[0]
+	list := r.warps[0]
 	if factor > 1 {
-		list = chirps[1]
+		list = r.warps[1]
 	}
 	for c := 0; c+1 < len(list); c += 2 {
 		r.warp(onset, at, factor, list[c], r.re)
@@ -113,50 +119,54 @@ func (r *rates) salience(onset []uint8, at, factor int, out []float64) {
 	}
 }
 
-// warp takes a window of the envelope on a time scale on which a rate with a
-// relative change [1/s] is even, less its mean, by the Hann window.
-func (r *rates) warp(onset []uint8, at, factor int, chirp float64, out []float64) {
-	step := float64(factor) / r.hz
-	sum, weights := 0.0, 0.0
-	for i := range out {
-		// φ = t + chirp·t²/2, solved for t
-		phi := (float64(i) - size/2 + 0.5) * step
-		t := phi
-		if chirp != 0 {
-			root := 1 + 2*chirp*phi
-			if root < 0.04 {
-				root = 0.04
-			}
-			t = 2 * phi / (1 + math.Sqrt(root))
-		}
-		out[i] = r.valueAt(onset, float64(at)+t*r.hz, factor)
-		if out[i] >= 0 {
-			sum += out[i] * r.hann[i]
-			weights += r.hann[i]
-		}
-	}
-	mean := sum / (weights + 1e-9)
-	for i := range out {
-		if out[i] < 0 {
-			out[i] = mean
-		}
-		out[i] = (out[i] - mean) * r.hann[i]
-	}
+// sample is where a value of a warped window lies in the envelope: from the
+// window's middle, in whole values and a part of one.
+type sample struct {
+	at   int32
+	part float32
 }
 
-// valueAt is the envelope at a place, the mean of factor values around it; −1
-// beyond the recording's ends.
-func (r *rates) valueAt(onset []uint8, place float64, factor int) float64 {
-	low := math.Floor(place)
-	i := int(low)
-	if i < 1 || i+2 >= len(onset) {
-		return -1
+// newWarp gives the places of a window on a time scale on which a rate with a
+// relative change [1/s] is even: φ = t + chirp·t²/2, solved for t.
+func newWarp(hz float64, factor int, chirp float64) []sample {
+	out := make([]sample, size)
+	for i := range out {
+		phi := (float64(i) - size/2 + 0.5) * float64(factor) / hz
+		t := 2 * phi / (1 + math.Sqrt(max(0.04, 1+2*chirp*phi)))
+		low := math.Floor(t * hz)
+		out[i] = sample{int32(low), float32(t*hz - low)}
 	}
-	part := place - low
-	if factor > 1 {
-		return (float64(onset[i-1]) + float64(onset[i]) + float64(onset[i+1]) + part*(float64(onset[i+2])-float64(onset[i-1]))) / 3
+	return out
+}
+
+// warp takes a window of the envelope around a value of it, less its mean, by
+// the Hann window. What lies beyond the recording's ends is taken as the mean.
+func (r *rates) warp(onset []uint8, at, factor int, places []sample, out []float64) {
+	sum, weights := 0.0, 0.0
+	for i, p := range places {
+		k := at + int(p.at)
+		if k < 1 || k+2 >= len(onset) {
+			out[i] = -1
+			continue
+		}
+		if factor > 1 { // the mean of three values
+			b, c := float64(onset[k]), float64(onset[k+1])
+			a, d := float64(onset[k-1]), float64(onset[k+2])
+			out[i] = (a + b + c + float64(p.part)*(d-a)) / 3
+		} else {
+			a := float64(onset[k])
+			out[i] = a + float64(p.part)*(float64(onset[k+1])-a)
+		}
+		sum += out[i] * r.hann[i]
+		weights += r.hann[i]
 	}
-	return float64(onset[i]) + part*(float64(onset[i+1])-float64(onset[i]))
+	mean := sum / (weights + 1e-9)
+	for i, v := range out {
+		if v < 0 {
+			v = mean
+		}
+		out[i] = (v - mean) * r.hann[i]
+	}
 }
 
 // score sums a power spectrum over the harmonics of each rate less what lies

@@ -20,7 +20,7 @@ const (
 
 // errorFloor is the least error of a rate, as a part of it: no window is known
 // better, whatever its noise.
-const errorFloor = 2e-4
+const errorFloor = 1e-4
 
 func windowS(rateHz float64) float64 {
 	return max(shortWindowS, min(longWindowS, windowClicks/rateHz))
@@ -172,7 +172,17 @@ func (g *guide) heard(f *fitter, fromS, toS float64) bool {
 	if !ok {
 		return false
 	}
-	f.sums(max(0, int(fromS*f.hz)), min(len(f.onset), int(toS*f.hz)), got.atS*f.hz, got.rateHz, got.slope, 0)
+	from, to := max(0, int(fromS*f.hz)), min(len(f.onset), int(toS*f.hz))
+	mid := float64(from+to-1) / 2
+	f.sums(from, to, mid, got.rateHz, got.slope, 0)
+	first, second := f.halves()
+	f.sums(from, to, mid, got.rateHz, got.slope, 0.5)
+	noise1, noise2 := f.halves()
+	return first > standsOut*noise1 && second > standsOut*noise2 && min(first, second) > 0.12*max(first, second)
+}
+
+// halves gives the harmonics' powers in either half of a window.
+func (f *fitter) halves() (first, second float64) {
 	var part [2]float64
 	for half := range 2 {
 		for h := 1; h <= f.used; h++ {
@@ -183,7 +193,7 @@ func (g *guide) heard(f *fitter, fromS, toS float64) bool {
 			part[half] += re*re + im*im
 		}
 	}
-	return min(part[0], part[1]) > 0.12*max(part[0], part[1])
+	return part[0], part[1]
 }
 
 // inLine leaves out points far from a curve through their neighbours.
