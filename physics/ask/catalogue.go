@@ -141,11 +141,11 @@ var catalogue = []Input{
 	blank(number("coast.clicks_per_turn", "1", 4, 200, 0, true, Measured, func(q *Question) *float64 { return &q.Coast.ClicksPerTurn }), "unknown"),
 	blank(number("coast.circumference_m", "m", 0.5, 3, 0.003, false, Measured, func(q *Question) *float64 { return &q.Coast.CircumferenceM }), "rollout"),
 	blank(number("coast.mass_kg", "kg", 20, 600, 1, true, Measured, func(q *Question) *float64 { return &q.Coast.MassKg }), "sum"),
-	blank(number("coast.mass_error_kg", "kg", 0, 50, 0, true, Assumed, func(q *Question) *float64 { return &q.Coast.MassErrorKg }), "assumed"),
+	blank(number("coast.mass_error_kg", "kg", 0, 50, 0.5, false, Assumed, func(q *Question) *float64 { return &q.Coast.MassErrorKg }), "assumed"),
 	blank(number("coast.grade", "1", -0.2, 0.2, 0.001, true, Measured, func(q *Question) *float64 { return &q.Coast.Grade }), "level"),
-	blank(number("coast.grade_error", "1", 0, 0.05, 0, true, Assumed, func(q *Question) *float64 { return &q.Coast.GradeError }), "assumed"),
+	blank(number("coast.grade_error", "1", 0, 0.05, 0.5, false, Assumed, func(q *Question) *float64 { return &q.Coast.GradeError }), "assumed"),
 	number("coast.wind_mps", "m/s", -8, 8, 0.5, true, Assumed, func(q *Question) *float64 { return &q.Coast.WindMps }),
-	number("coast.wind_error_mps", "m/s", 0, 5, 0, true, Assumed, func(q *Question) *float64 { return &q.Coast.WindErrorMps }),
+	number("coast.wind_error_mps", "m/s", 0, 5, 0.5, false, Assumed, func(q *Question) *float64 { return &q.Coast.WindErrorMps }),
 	number("coast.rolled_turns", "1", 1, 50, 0, true, Measured, func(q *Question) *float64 { return &q.Coast.RolledTurns }),
 }
 

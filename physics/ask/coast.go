@@ -112,18 +112,18 @@ func (q *Question) CoastSetup(altitudeM float64) coast.Setup {
 // clicks per turn that are not known stay so.
 func (q *Question) showCoast(s *Shown, path string) {
 	taken := func(v coast.Value) { s.take(v.Value, v.Value-v.Error, v.Value+v.Error) }
-	nan := math.NaN()
+	half := func(v float64) { s.take(v, 0.5*v, 1.5*v) } // an error is itself known to half
 	switch path {
 	case "coast.circumference_m":
 		taken(q.Circumference())
 	case "coast.mass_kg":
 		taken(q.CoastMass())
 	case "coast.mass_error_kg":
-		s.take(q.CoastMass().Error, nan, nan)
+		half(q.CoastMass().Error)
 	case "coast.grade":
 		taken(q.CoastGrade())
 	case "coast.grade_error":
-		s.take(q.CoastGrade().Error, nan, nan)
+		half(q.CoastGrade().Error)
 	}
 }
 
