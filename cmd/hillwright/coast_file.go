@@ -16,7 +16,7 @@ import (
 type heard struct {
 	name  string
 	sound *click.Heard
-	cutS  float64    // where a damaged recording ends [s], 0 for a whole one
+	cut   bool       // the recording ends before its time
 	table *coast.Run // nil for a recording
 }
 
@@ -29,7 +29,7 @@ func hear(name string) (heard, error) {
 	}
 	defer file.Close()
 	var other *sound.Error
-	h.sound, h.cutS, err = listen(file)
+	h.sound, h.cut, err = listen(file)
 	if errors.As(err, &other) && other.Kind == sound.NotSound && other.Looks == sound.LookText {
 		if _, err = file.Seek(0, io.SeekStart); err != nil {
 			return h, fmt.Errorf("%s: %w", name, err)
@@ -45,14 +45,14 @@ func hear(name string) (heard, error) {
 }
 
 // listen follows the clicks of a recording.
-func listen(file io.Reader) (*click.Heard, float64, error) {
+func listen(file io.Reader) (*click.Heard, bool, error) {
 	r, err := sound.Open(file)
 	if err != nil {
-		return nil, 0, err
+		return nil, false, err
 	}
-	l, err := click.NewListener(r.Rate())
+	l, err := click.NewListener(r.RateHz())
 	if err != nil {
-		return nil, 0, err
+		return nil, false, err
 	}
 	part := make([]float32, 1<<14)
 	for {
@@ -62,10 +62,10 @@ func listen(file io.Reader) (*click.Heard, float64, error) {
 			break
 		}
 		if err != nil {
-			return nil, 0, err
+			return nil, false, err
 		}
 	}
 	h, err := l.Finish()
-	cutS, _ := r.Cut()
-	return h, cutS, err
+	_, cut := r.Cut()
+	return h, cut, err
 }

@@ -34,6 +34,9 @@ func commands() []command {
 		{"ask", "answer a question in the terminal", func(_ context.Context, args []string, out, problems io.Writer) int {
 			return runAsk(args, out, problems)
 		}},
+		{"coast", "work out a bike's drag from the sound of its freehub", func(_ context.Context, args []string, out, problems io.Writer) int {
+			return runCoast(args, out, problems)
+		}},
 		{"pack", "make a shop's page, a folder of static files", packCommand},
 		{"serve", "serve a packed page to try it", serveCommand},
 	}

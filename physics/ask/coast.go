@@ -3,6 +3,7 @@ package ask
 import (
 	"math"
 
+	"hillwright/physics/click"
 	"hillwright/physics/coast"
 	"hillwright/physics/road"
 	"hillwright/physics/unit"
@@ -142,4 +143,29 @@ func (q *Question) spread(path string) float64 {
 func (q *Question) part(path string) float64 {
 	in, _ := InputAt(path)
 	return in.Spread
+}
+
+// ClicksKnown tells whether the clicks of a turn of the wheel are given.
+func (q *Question) ClicksKnown() bool { return !math.IsNaN(q.Coast.ClicksPerTurn) }
+
+// RunOf makes a run of click rates, without what does not belong to the
+// coast-down at its ends (coast.Trim). The clicks per turn must be known.
+func (q *Question) RunOf(points []click.Point, back bool) coast.Run {
+	r := coast.Run{Back: back, Points: coast.FromClicks(points, q.Coast.ClicksPerTurn, q.Circumference().Value)}
+	return r.Cut(coast.Trim(r.Points))
+}
+
+// BikeDrag gives bike.crr and bike.cda_m2 that resist as the coast-downs did.
+func (q *Question) BikeDrag(r *coast.Result) (crr, cdaM2 coast.Estimate) {
+	s := q.CoastSetup(0)
+	return r.Bike(&s, q.Bike.WheelDragM2, q.Load.CdAM2)
+}
+
+// SpinWheel judges a wheel on the stand by its click rates: one of the bike's
+// two, with half of their inertia.
+func (q *Question) SpinWheel(points []click.Point, altitudeM float64) (*coast.Spun, error) {
+	around := q.Circumference().Value
+	inertia := q.Bike.WheelInertiaKgM2 / 2
+	part := q.part("bike.wheel_inertia_kgm2")
+	return coast.Spin(coast.FromClicks(points, q.Coast.ClicksPerTurn, around), coast.Value{Value: inertia, Error: part * inertia}, around, q.Day.Density(altitudeM))
 }

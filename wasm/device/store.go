@@ -96,8 +96,9 @@ func joined(records js.Value) []byte {
 		all.Things = append(all.Things, one.Things...)
 		all.Hills = append(all.Hills, one.Hills...)
 		all.Readings = append(all.Readings, one.Readings...)
+		all.Runs = append(all.Runs, one.Runs...)
 	}
-	if len(all.Things)+len(all.Hills)+len(all.Readings) == 0 {
+	if len(all.Things)+len(all.Hills)+len(all.Readings)+len(all.Runs) == 0 {
 		return nil
 	}
 	return keep.Encode(all)

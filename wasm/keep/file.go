@@ -10,6 +10,7 @@ type Things struct {
 	Things   []Thing
 	Hills    []Hill
 	Readings []Reading
+	Runs     []Run
 }
 
 // The file of saved things is JSON:
@@ -20,10 +21,12 @@ type Things struct {
 //	 "hills":[{"id":"…","names":{"":"…"},"edge_m":[0,400],"height_m":[0,28],
 //	           "bearing_deg":[90],"height_known":false,"sections":"400 m at 7 %","changed":1790000000}],
 //	 "readings":[{"id":"…","place":"…","note":"…","method":"tilt-turned","grade":0.12,"error":0.002,
-//	              "time_s":1790000000,"pitch_m":60,"lat_deg":44.1,"lon_deg":8.2,"changed":1790000000}]}
+//	              "time_s":1790000000,"pitch_m":60,"lat_deg":44.1,"lon_deg":8.2,"changed":1790000000}],
+//	 "runs":[{"id":"…","name":"…","bike":"…","kind":"clicks","time_s":1790000000,"from_s":0.4,"to_s":41.2,
+//	          "back":false,"left_out":false,"at_s":[0.4,0.9],"is":[140.1,138.7],"error":[0.05,0.05]}]}
 //
-// Grades and errors (1 σ) are plain fractions. Readings are absent where there
-// are none, and in files from before there were any.
+// Grades and errors (1 σ) are plain fractions. Readings and runs are absent
+// where there are none, and in files from before there were any.
 // Version rises when an older reader would misread a newer file.
 const (
 	fileFormat  = "hillwright-things"
@@ -56,6 +59,15 @@ func Encode(t Things) []byte {
 				out = append(out, ',')
 			}
 			out = putReading(append(out, '\n'), &t.Readings[i])
+		}
+	}
+	if len(t.Runs) > 0 {
+		out = append(out, `],"runs":[`...)
+		for i := range t.Runs {
+			if i > 0 {
+				out = append(out, ',')
+			}
+			out = putRun(append(out, '\n'), &t.Runs[i])
 		}
 	}
 	return append(out, "]}\n"...)
@@ -133,6 +145,7 @@ func Decode(data []byte) (Things, []Fault) {
 	out.Things = r.things(file["things"])
 	out.Hills = r.hills(file["hills"])
 	out.Readings = r.readings(file["readings"])
+	out.Runs = r.runs(file["runs"])
 	return out, r.faults
 }
 

@@ -15,6 +15,7 @@ func Merge(have, from Things) (Things, Merged) {
 		Things:   append([]Thing(nil), have.Things...),
 		Hills:    append([]Hill(nil), have.Hills...),
 		Readings: append([]Reading(nil), have.Readings...),
+		Runs:     append([]Run(nil), have.Runs...),
 	}
 	var did Merged
 	for i := range from.Things {
@@ -51,6 +52,18 @@ func Merge(have, from Things) (Things, Merged) {
 		}
 		if did.count(r.Changed, out.Readings[at].Changed, string(putReading(nil, r)) == string(putReading(nil, &out.Readings[at]))) {
 			out.Readings[at] = *r
+		}
+	}
+	for i := range from.Runs {
+		r := &from.Runs[i]
+		at := out.RunAt(r.ID)
+		if at < 0 {
+			out.Runs = append(out.Runs, *r)
+			did.Added++
+			continue
+		}
+		if did.count(r.Changed, out.Runs[at].Changed, string(putRun(nil, r)) == string(putRun(nil, &out.Runs[at]))) {
+			out.Runs[at] = *r
 		}
 	}
 	return out, did

@@ -1,6 +1,7 @@
 package state
 
 import (
+	"hillwright/physics/click"
 	"hillwright/physics/hill"
 	"hillwright/physics/slope"
 )
@@ -9,6 +10,7 @@ import (
 const (
 	GoHillside = "hillside"
 	GoSentence = "sentence"
+	GoBench    = "bench"
 )
 
 // Action is one thing that happens: a touch, a key, a file that arrives. Name
@@ -23,10 +25,14 @@ type Action struct {
 	Hill *hill.Profile
 	Err  error
 
+	Heard *click.Heard // what was heard in a recording
+
 	Leans []Lean    // samples of the tilt sensor
 	Fix   slope.Fix // of the location sensor
 	// Now is when it happens, in seconds since 1970: the state has no clock.
 	Now int64
+	// ClockS is a clock for spans [s].
+	ClockS float64
 }
 
 // What a person does. Elements name these in data-act.
@@ -71,7 +77,7 @@ const (
 	SetUnits       = "units"          // Arg: metric or imperial
 	SetMark        = "mark"           // Arg: point or comma
 	SetTheme       = "theme"          // Arg: sun, dusk, or device
-	GoTo           = "go"             // Arg: a place of the page: GoHillside or GoSentence
+	GoTo           = "go"             // Arg: a place of the page: GoHillside, GoBench or GoSentence
 	Measure        = "measure"        // Arg: a way to measure a grade, "" ends it
 	DialUp         = "dial-up"        // Arg: path of a dial
 	DialDown       = "dial-down"      // Arg: path of a dial
@@ -97,6 +103,25 @@ const (
 	GroupAdd       = "group-add"      // Arg: a rider's id, on the chosen bike
 	GroupTake      = "group-take"     // Arg: number in the group: they become who is asked about
 	GroupDrop      = "group-drop"     // Arg: number in the group
+	BenchJob       = "bench-job"      // Arg: JobCoast or JobStand
+	GradeFromSide  = "bench-grade"    // takes the hillside's grade
+	SoundFor       = "sound-for"      // Arg: ForRun, ForSpin, ForCount: records
+	SoundFrom      = "sound-from"     // Arg: as SoundFor: asks for a file
+	SoundDone      = "sound-done"     // ends the recording
+	SoundKeep      = "sound-keep"     // the recording at hand as a file
+	SoundAgain     = "sound-again"    // listens to it once more
+	SoundLeave     = "sound-leave"    // stops listening
+	LapsBegin      = "laps"           // Arg: LapMarks or LapDisplay, "" ends without a run
+	Lap            = "lap"            // ClockS
+	LapBack        = "lap-back"       // takes the last back
+	LapsEnd        = "laps-end"       // makes a run of them
+	RunWay         = "run-way"        // Arg: id=out or id=back
+	RunUse         = "run-use"        // Arg: id=yes or id=no
+	RunForget      = "run-forget"     // Arg: id
+	CutHandle      = "cut"            // Arg: id=from or id=to, X: place in the picture
+	CutLater       = "cut-later"      // Arg: id=from or id=to: half a second later
+	CutEarlier     = "cut-earlier"    // Arg: id=from or id=to
+	IntoBike       = "into-bike"      // puts what was measured into the bike
 
 	UseNew     = "use-new"    // takes the new version
 	GoOn       = "go-on"      // after something broke
@@ -126,6 +151,13 @@ const (
 	Awoken       = "awoken"        // the screen is kept awake
 	Zone         = "zone"          // X: what the device's clock is ahead of UTC [s]
 	Voiced       = "voiced"        // Arg: tags of the languages that the device speaks by itself
+
+	SoundLevel   = "sound-level"   // X: the loudest sample lately, full scale 1; Y: how long it records [s]; Text: "gain" where the device changes the level by itself
+	SoundReady   = "sound-ready"   // Arg: the name of the recording at hand, Text: "recorded" or "file"
+	SoundFailed  = "sound-failed"  // Arg: absent, refused or lost
+	ListenPart   = "listen-part"   // X: the part that is heard
+	Listened     = "listened"      // Heard; X: where the file is cut off [s], 0 when it is whole
+	ListenFailed = "listen-failed" // Err
 )
 
 // ByHand lists the names that an element may carry in data-act.
@@ -137,6 +169,8 @@ func ByHand() []string {
 		SetLanguage, SetUnits, SetMark, SetTheme,
 		GoTo, Measure, DialUp, DialDown, Pick, Average, Freeze, OneReading, StartOver, Read, TrackHandle, Tell,
 		PlaceNext, PlaceTo, PlaceName, ReadingOpen, ReadingNote, TypeNote, ReadingForget, HillOfReadings, ReadingsCSV, ReadingsGPX,
-		GroupOpen, GroupAdd, GroupTake, GroupDrop, UseNew, GoOn, SaveBroken,
+		GroupOpen, GroupAdd, GroupTake, GroupDrop,
+		BenchJob, GradeFromSide, SoundFor, SoundFrom, SoundDone, SoundKeep, SoundAgain, SoundLeave, LapsBegin, Lap, LapBack, LapsEnd,
+		RunWay, RunUse, RunForget, CutHandle, CutLater, CutEarlier, IntoBike, UseNew, GoOn, SaveBroken,
 	}
 }

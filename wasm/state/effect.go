@@ -28,6 +28,12 @@ const (
 	Speak                           // Key: language, Data: plain text
 	Tone                            // Key: a pattern of package words, or "step", "done"
 	Show                            // Key: the id of an element to bring into view and to focus
+	StartSound                      // the microphone; comes back as SoundLevel, SoundReady, SoundFailed
+	StopSound                       //
+	PickSound                       // comes back as SoundReady
+	Listen                          // to the recording at hand; comes back as ListenPart, Listened, ListenFailed
+	StopListening                   //
+	SaveSound                       // Key: the name under which the recording at hand is given as a file
 )
 
 // Effect is a request to the device. Files' types are media types.
@@ -78,6 +84,17 @@ func changedRecords(prev, next keep.Things) []Effect {
 			out = append(out, Effect{Kind: DropThing, Key: "reading:" + r.ID})
 		}
 	}
+	for i := range next.Runs {
+		r := &next.Runs[i]
+		if at := prev.RunAt(r.ID); at < 0 || !sameRun(&prev.Runs[at], r) {
+			out = append(out, put("run:"+r.ID, keep.Things{Runs: next.Runs[i : i+1]}))
+		}
+	}
+	for _, r := range prev.Runs {
+		if next.RunAt(r.ID) < 0 {
+			out = append(out, Effect{Kind: DropThing, Key: "run:" + r.ID})
+		}
+	}
 	for _, t := range prev.Things {
 		if next.At(t.Kind, t.ID) < 0 {
 			out = append(out, Effect{Kind: DropThing, Key: string(t.Kind) + ":" + t.ID})
@@ -101,4 +118,9 @@ func sameRecord(a, b keep.Things) bool { return string(keep.Encode(a)) == string
 // change, so that the same first edge means the same list.
 func sameHill(a, b *keep.Hill) bool {
 	return a.Changed == b.Changed && a.Names[""] == b.Names[""] && &a.EdgeM[0] == &b.EdgeM[0]
+}
+
+// sameRun tells that a run was not written to; its numbers never are.
+func sameRun(a, b *keep.Run) bool {
+	return a.Back == b.Back && a.LeftOut == b.LeftOut && a.FromS == b.FromS && a.ToS == b.ToS && a.Changed == b.Changed
 }

@@ -219,7 +219,7 @@ func (s *State) importFile(a Action) {
 	got, faults := keep.Decode(a.Data)
 	s.Faults = faults
 	s.Place, s.Path = PlaceKept, ""
-	if len(got.Things)+len(got.Hills)+len(got.Readings) == 0 && len(faults) > 0 {
+	if len(got.Things)+len(got.Hills)+len(got.Readings)+len(got.Runs) == 0 && len(faults) > 0 {
 		s.Message = Message{}
 		return
 	}

@@ -145,6 +145,9 @@ var dials = []input{
 	{"dial.rolled", DialRolled, asIs, [2]float64{1, 1}},
 	{"dial.from", DialFrom, asHeight, [2]float64{10, 20}},
 	{"dial.to", DialTo, asHeight, [2]float64{10, 20}},
+	{"dial.marks", DialMarks, asHeight, [2]float64{5, 10}},
+	{"dial.shown", DialShown, asSpeed, [2]float64{1, 1}},
+	{"dial.fewer", DialFewer, asSpeed, [2]float64{1, 1}},
 }
 
 // Clock writes the time of day of a local time [s since 1970]: "07:05".

@@ -137,6 +137,15 @@ var inputs = []input{
 	{"ride.recover", InRecover, asIs, [2]float64{}},
 	{"ride.sight_m", InSight, asHeight, [2]float64{5, 10}},
 	{"ride.reaction_s", InReaction, asSeconds, [2]float64{0.1, 0.1}},
+	{"coast.clicks_per_turn", InClicks, asIs, [2]float64{1, 1}},
+	{"coast.circumference_m", InAround, asMM, [2]float64{1, 1}},
+	{"coast.mass_kg", InCoastMass, asMass, [2]float64{0.5, 1}},
+	{"coast.mass_error_kg", InCoastMassError, asMass, [2]float64{0.5, 1}},
+	{"coast.grade", InCoastGrade, asPercent, [2]float64{0.1, 0.1}},
+	{"coast.grade_error", InCoastGradeError, asPercent, [2]float64{0.05, 0.05}},
+	{"coast.wind_mps", InCoastWind, asSpeed, [2]float64{1, 1}},
+	{"coast.wind_error_mps", InCoastWindError, asSpeed, [2]float64{0.5, 0.5}},
+	{"coast.rolled_turns", InRolledTurns, asIs, [2]float64{1, 1}},
 }
 
 func inputAt(path string) (input, bool) {

@@ -212,5 +212,5 @@ const (
 	CautionHillside
 	CautionWetRoad
 
-	keys // how many there are
+	hillsideKeys // how many there are so far; key_bench.go goes on
 )

@@ -7,10 +7,13 @@ import (
 	"strings"
 
 	"hillwright/physics/ask"
+	"hillwright/physics/click"
+	"hillwright/physics/coast"
 	"hillwright/physics/hill"
 	"hillwright/physics/ride"
 	"hillwright/physics/rig"
 	"hillwright/physics/slope"
+	"hillwright/physics/sound"
 	"hillwright/wasm/keep"
 )
 
@@ -26,9 +29,18 @@ func (v Voice) Problem(err error) string {
 	var profile *hill.ProfileError
 	var fault keep.Fault
 	var grade *slope.Error
+	var heard *sound.Error
+	var clicks *click.Error
+	var run *coast.Error
 	switch {
 	case errors.As(err, &grade):
 		return v.slopeProblem(grade)
+	case errors.As(err, &heard):
+		return v.soundProblem(heard)
+	case errors.As(err, &clicks):
+		return v.clickProblem(clicks)
+	case errors.As(err, &run):
+		return v.coastProblem(run)
 	case errors.As(err, &input):
 		return v.inputProblem(input)
 	case errors.As(err, &section):

@@ -134,6 +134,12 @@ var choices = []choice{
 	{"bike.pack.max_a", "assumed", BlankAssumed},
 	{"day.grip", "ground", BlankGround},
 	{"day.pack_c", "day", BlankDay},
+	{"coast.clicks_per_turn", "unknown", BlankUnknown},
+	{"coast.circumference_m", "rollout", BlankRollout},
+	{"coast.mass_kg", "sum", BlankSum},
+	{"coast.mass_error_kg", "usual", BlankUsual},
+	{"coast.grade", "level", BlankLevel},
+	{"coast.grade_error", "usual", BlankUsual},
 }
 
 // Choice gives the person's word for a choice of an input ("crank" of

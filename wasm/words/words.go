@@ -59,8 +59,8 @@ type Voice struct {
 }
 
 var (
-	english   = whole(englishPage, englishRide, englishHillside)
-	german    = whole(germanPage, germanRide, germanHillside)
+	english   = whole(englishPage, englishRide, englishHillside, englishBench)
+	german    = whole(germanPage, germanRide, germanHillside, germanBench)
 	catalogue = [langs]*[keys]string{&english, &german}
 )
 
