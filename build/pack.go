@@ -70,7 +70,7 @@ func Assemble(parts Parts) (*Page, error) {
 // gives the names by what they are for.
 func (p *Page) addHashed(parts Parts) (names, error) {
 	n := names{}
-	for _, name := range []string{"style.css", "boot.js", "worker.js"} {
+	for _, name := range []string{"style.css", "boot.js", "worker.js", "recorder.js"} {
 		data, err := fs.ReadFile(parts.Site, name)
 		if err != nil {
 			return nil, err

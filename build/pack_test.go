@@ -234,7 +234,7 @@ func TestEveryChangeMakesANewBuild(t *testing.T) {
 func siteWith(t *testing.T, name string, change func(string) string) fs.FS {
 	t.Helper()
 	files := fstest.MapFS{}
-	for _, each := range []string{"shell.html", "style.css", "boot.js", "worker.js", "sw.js"} {
+	for _, each := range []string{"shell.html", "style.css", "boot.js", "worker.js", "recorder.js", "sw.js"} {
 		data, err := fs.ReadFile(site.Files(), each)
 		if err != nil {
 			t.Fatal(err)

@@ -6,6 +6,8 @@
 //                     Take them, then set it to null: that ends the recording.
 //   hillwrightShop    the text of shop.json.
 //   hillwrightStartWorker  a function that starts a worker with the same program.
+//   hillwrightRecorder  the address of the script that takes the microphone's
+//                     samples.
 //   hillwrightDatabase  a function that opens the database of a name and a
 //                     version and gives the request, or null where the browser
 //                     refuses: there even looking at window.indexedDB may throw,
@@ -106,6 +108,7 @@
     try {
       const [module, shop] = await Promise.all([compile(files.wasm), text(files.shop), script(files.exec), parsed]);
       window.hillwrightShop = shop;
+      window.hillwrightRecorder = files.recorder;
       window.hillwrightStartWorker = () => {
         const worker = new Worker(files.worker);
         worker.postMessage({ module, exec: files.exec });

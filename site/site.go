@@ -13,7 +13,7 @@ var files embed.FS
 //go:embed shop
 var demo embed.FS
 
-// Files holds shell.html, style.css, boot.js, worker.js and sw.js.
+// Files holds shell.html, style.css, boot.js, worker.js, recorder.js and sw.js.
 func Files() fs.FS { return files }
 
 // DemoShop is the folder of the demo shop, as build/shop reads it.

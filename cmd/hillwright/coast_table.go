@@ -12,14 +12,6 @@ import (
 	"hillwright/physics/coast"
 )
 
-// Errors of what a person reads off, one standard deviation. Common practice,
-// no source: a thumb on a stopwatch, a display that shows whole km/h a little
-// late.
-const (
-	thumbErrorS     = 0.15
-	displayErrorMps = 0.5 / 3.6
-)
-
 // The columns that a table of a coast-down may have.
 const (
 	colTime     = "time_s"
@@ -70,9 +62,9 @@ func readTable(r io.Reader) (coast.Run, error) {
 			}
 		}
 		if what == colDistance {
-			run.Marks = append(run.Marks, coast.Mark{AtM: values[1], AtS: values[0], ErrorS: thumbErrorS})
+			run.Marks = append(run.Marks, coast.Mark{AtM: values[1], AtS: values[0], ErrorS: coast.ThumbErrorS})
 		} else {
-			run.Points = append(run.Points, coast.Point{AtS: values[0], SpeedMps: values[1] * mps[what], ErrorMps: displayErrorMps})
+			run.Points = append(run.Points, coast.Point{AtS: values[0], SpeedMps: values[1] * mps[what], ErrorMps: coast.DisplayErrorMps})
 		}
 	}
 }

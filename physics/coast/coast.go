@@ -45,6 +45,14 @@ type Point struct{ AtS, SpeedMps, ErrorMps float64 }
 // Mark is the time at which a mark was passed, AtM [m] along the road.
 type Mark struct{ AtM, AtS, ErrorS float64 }
 
+// Errors of what a person reads off, one standard deviation: a thumb on a
+// stopwatch [s]; a display of whole km/h that follows a little late [m/s].
+// Common practice, no source.
+const (
+	ThumbErrorS     = 0.15
+	DisplayErrorMps = 0.5 / 3.6
+)
+
 // Estimate is a number that was found: Low and High are its 90 % interval,
 // Error one standard deviation. Held tells that the data could not tell it
 // better than was known before.

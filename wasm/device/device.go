@@ -21,15 +21,21 @@ type Device struct {
 	watching bool     // the page's showing is watched for the lock
 	lock     js.Value // on the screen
 	sound    js.Value // an audio context, once there was a tone
+
+	recording *recording // what is being recorded
+	held      js.Value   // the recording at hand, a file of the browser's
 }
 
 // New takes hold of the browser.
 func New() *Device {
-	return &Device{database: js.Undefined(), lock: js.Undefined(), sound: js.Undefined()}
+	return &Device{database: js.Undefined(), lock: js.Undefined(), sound: js.Undefined(), held: js.Undefined()}
 }
 
 // Now is the time in seconds since 1970.
 func (d *Device) Now() int64 { return int64(js.Global().Get("Date").Call("now").Float() / 1000) }
+
+// ClockS is a clock for spans [s].
+func (d *Device) ClockS() float64 { return nowMs() / 1000 }
 
 // nowMs is a clock for spans [ms].
 func nowMs() float64 { return js.Global().Get("performance").Call("now").Float() }

@@ -9,11 +9,16 @@ import "syscall/js"
 const (
 	TrackFiles = ".gpx,.xml,.geojson,.json,application/gpx+xml,application/xml,text/xml,application/geo+json,application/json,application/octet-stream,text/plain"
 	ThingFiles = ".json,application/json,text/plain,application/octet-stream"
+	SoundFiles = ".mp3,.wav,audio/*,application/octet-stream"
 )
 
 // Pick lets the person pick a file, and gives its name and content. Nothing
 // comes back when they pick none.
 func (d *Device) Pick(accept string, got func(name string, data []byte)) {
+	d.pickFile(accept, func(file js.Value) { d.ReadFile(file, got) })
+}
+
+func (d *Device) pickFile(accept string, got func(file js.Value)) {
 	field := document().Call("createElement", "input")
 	field.Set("type", "file")
 	field.Set("accept", accept)
@@ -27,7 +32,7 @@ func (d *Device) Pick(accept string, got func(name string, data []byte)) {
 		"change": func(js.Value) {
 			files := field.Get("files")
 			if files.Length() > 0 {
-				d.ReadFile(files.Index(0), got)
+				got(files.Index(0))
 			}
 			field.Call("remove")
 		},
@@ -47,7 +52,10 @@ func (d *Device) ReadFile(file js.Value, got func(name string, data []byte)) {
 
 // Download gives the person a file.
 func (d *Device) Download(name, mediaType string, data []byte) {
-	blob := window().Get("Blob").New([]any{arrayOf(data)}, map[string]any{"type": mediaType})
+	d.give(window().Get("Blob").New([]any{arrayOf(data)}, map[string]any{"type": mediaType}), name)
+}
+
+func (d *Device) give(blob js.Value, name string) {
 	address := window().Get("URL").Call("createObjectURL", blob)
 	link := document().Call("createElement", "a")
 	link.Set("href", address)

@@ -38,14 +38,18 @@ const tellEvery = 60
 func answerRequest(request js.Value) {
 	id := request.Get("id").Int()
 	told := nowMs()
-	t := readTrack(bytesOf(request.Get("track")), func(part float64) bool {
+	tell := func(part float64) bool {
 		if now := nowMs(); now-told > tellEvery {
 			told = now
 			js.Global().Call("postMessage", map[string]any{"id": id, "part": part})
 		}
 		return true
-	})
-	js.Global().Call("postMessage", messageOf(id, t))
+	}
+	if file := request.Get("sound"); given(file) {
+		js.Global().Call("postMessage", heardMessage(id, listenTo(file, tell)))
+		return
+	}
+	js.Global().Call("postMessage", messageOf(id, readTrack(bytesOf(request.Get("track")), tell)))
 }
 
 // readTrack makes a hill of a track file. A failure in our own program is an
@@ -53,7 +57,7 @@ func answerRequest(request js.Value) {
 func readTrack(data []byte, progress func(float64) bool) (t Track) {
 	defer func() {
 		if failed := recover(); failed != nil {
-			t = Track{Err: workerError("the program failed on this file; please keep it for whoever mends the program")}
+			t = Track{Err: errFailed}
 		}
 	}()
 	track, err := hill.ReadTrack(bytes.NewReader(data), progress)
@@ -114,6 +118,9 @@ func trackOf(message js.Value) Track {
 
 // workerError is an error of which there is only a text.
 type workerError string
+
+// errFailed is a failure of our own on one file.
+const errFailed = workerError("the program failed on this file; please keep it for whoever mends the program")
 
 func (e workerError) Error() string { return string(e) }
 

@@ -19,8 +19,8 @@ type worker struct {
 	js   js.Value
 	last int // the request that is answered; messages of others are of no use
 	part func(float64)
-	done func(Track)
-	data []byte // kept to be read here if the worker fails
+	done func(message js.Value)
+	here func() // does the same in the page, if the worker fails
 }
 
 // ReadTrack reads a track file beside the page and makes a hill of it. part is
@@ -28,20 +28,33 @@ type worker struct {
 // worker it is read in slices between frames. A reading that is under way is
 // stopped first.
 func (d *Device) ReadTrack(data []byte, part func(float64), done func(Track)) {
+	here := func() { d.readHere(data, part, done) }
+	d.ask(func() (map[string]any, []any) {
+		array := arrayOf(data)
+		return map[string]any{"track": array}, []any{array.Get("buffer")}
+	}, part, func(message js.Value) { done(trackOf(message)) }, here)
+}
+
+// ask has the worker do one thing: request gives the message and what is handed
+// over with it. Work that is under way is stopped, its answer is of no use.
+func (d *Device) ask(request func() (message map[string]any, hand []any), part func(float64), done func(js.Value), here func()) {
 	d.stopped++
 	if d.worker == nil && !d.startWorker() {
-		d.readHere(data, part, done)
+		here()
 		return
 	}
 	w := d.worker
 	w.last++
-	w.part, w.done, w.data = part, done, data
-	array := arrayOf(data)
-	w.js.Call("postMessage", map[string]any{"id": w.last, "track": array}, []any{array.Get("buffer")})
+	w.part, w.done, w.here = part, done, here
+	message, hand := request()
+	message["id"] = w.last
+	w.js.Call("postMessage", message, hand)
 }
 
 // StopTrack stops a reading at once.
-func (d *Device) StopTrack() {
+func (d *Device) StopTrack() { d.stopWork() }
+
+func (d *Device) stopWork() {
 	d.stopped++
 	if d.worker != nil {
 		d.worker.js.Call("terminate")
@@ -66,8 +79,8 @@ func (d *Device) startWorker() bool {
 	once(w.js, map[string]func(js.Value){"error": func(e js.Value) {
 		e.Call("preventDefault")
 		if d.worker == w {
-			d.StopTrack()
-			d.readHere(w.data, w.part, w.done)
+			d.stopWork()
+			w.here()
 		}
 	}})
 	return true
@@ -81,8 +94,8 @@ func (w *worker) take(message js.Value) {
 		w.part(part.Float())
 		return
 	}
-	w.data = nil
-	w.done(trackOf(message))
+	w.here = nil // what it was asked need not be kept
+	w.done(message)
 }
 
 // sliceFor is how long a slice of a reading in the page itself may take [ms].

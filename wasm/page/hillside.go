@@ -29,6 +29,8 @@ func (p *page) runHillside(e state.Effect) {
 		p.works.Speak(e.Key, string(e.Data))
 	case state.Tone:
 		p.works.Tones(e.Key)
+	default:
+		p.runBench(e)
 	}
 }
 

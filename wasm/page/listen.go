@@ -77,11 +77,11 @@ func isField(act string) bool {
 
 // isDrag tells that an action follows the finger.
 func isDrag(act string) bool {
-	return act == state.MoveStaff || act == state.MoveWeight || act == state.Sketch || act == state.TrackHandle
+	return act == state.MoveStaff || act == state.MoveWeight || act == state.Sketch || act == state.TrackHandle || act == state.CutHandle
 }
 
 func (h *hand) do(a state.Action) {
-	a.Now = h.page.works.Now()
+	a.Now, a.ClockS = h.page.works.Now(), h.page.works.ClockS()
 	h.page.do(a)
 }
 
@@ -142,7 +142,7 @@ func (h *hand) down(e js.Value) {
 		h.drag, h.act, h.arg = el, act, arg
 		el.Call("setPointerCapture", e.Get("pointerId"))
 		h.move(e)
-	case act == state.StepUp || act == state.StepDown || act == state.StaffStep || act == state.DialUp || act == state.DialDown:
+	case act == state.StepUp || act == state.StepDown || act == state.StaffStep || act == state.DialUp || act == state.DialDown || act == state.CutLater || act == state.CutEarlier:
 		h.repeats++
 		press := h.repeats
 		device.After(holdFor, func() { h.repeat(press, state.Action{Name: act, Arg: arg}) })

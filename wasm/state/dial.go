@@ -36,6 +36,7 @@ var dialRanges = map[string]dialRange{
 	DialFoot: {400, -400, 5000}, DialTop: {410, -400, 5000},
 	DialLength: {60, 5, 5000}, DialPaces: {80, 1, 5000}, DialPace: {0.75, 0.3, 1.5}, DialRolled: {28, 1, 2000},
 	DialFrom: {0, 0, 1e7}, DialTo: {0, 0, 1e7},
+	DialMarks: {20, 2, 200}, DialShown: {25 / 3.6, 5 / 3.6, 60 / 3.6}, DialFewer: {1 / 3.6, 0.5 / 3.6, 10 / 3.6},
 }
 
 // Dial gives a dial's value.

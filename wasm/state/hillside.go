@@ -73,12 +73,16 @@ type Pitch struct {
 // practice, no source.
 const RollingMps = 10 / 3.6
 
-// goTo opens the hillside or the sentence.
+// goTo opens the hillside, the bench or the sentence. A recording ends where
+// one leaves it, and is listened to.
 func (s *State) goTo(place string) []Effect {
 	s.leave()
 	s.Place, s.Path, s.Message = "", "", Message{}
-	s.Side.Open = place == GoHillside
+	s.Side.Open, s.Bench.Open = place == GoHillside, place == GoBench
 	effects := s.stopMeasuring()
+	if s.Bench.Sound.Stage == SoundRecording && !s.Bench.Open {
+		effects = append(effects, Effect{Kind: StopSound}, Effect{Kind: Sleep})
+	}
 	return append(effects, Effect{Kind: Show, Key: "go-" + place})
 }
 

@@ -21,6 +21,9 @@ func Reduce(prev *State, a Action) (*State, []Effect) {
 	if next.Side.stale && next.Side.Open {
 		next.consider()
 	}
+	if next.Bench.stale && next.Bench.Open {
+		next.weighRuns()
+	}
 	return next, append(effects, storage(prev, next)...)
 }
 
@@ -46,6 +49,9 @@ func (s *State) do(a Action) []Effect {
 		return effects
 	}
 	if did, effects := s.doHillside(a); did {
+		return effects
+	}
+	if did, effects := s.doBench(a); did {
 		return effects
 	}
 	return s.doRest(a)
@@ -170,6 +176,7 @@ func (s *State) undo() {
 	s.Question.Source = copied(was.Question.Source)
 	s.Own, s.Sections, s.Profile = was.Own, was.Sections, was.Profile
 	s.ownRevision++
+	s.Bench.stale = true
 	s.before, s.Message, s.stale = nil, Message{}, true
 }
 

@@ -21,6 +21,8 @@ import (
 const (
 	Hill keep.Kind = "hill"
 	Ride keep.Kind = "ride"
+	// Coast is for the inputs of a coast-down; there are no things of it.
+	Coast keep.Kind = "coast"
 )
 
 // Kinds are the kinds of things in the order of the sentence.
@@ -63,7 +65,8 @@ type State struct {
 	Name        string // as typed, for what is to be kept
 	Reading     Reading
 
-	Side Hillside
+	Side  Hillside
+	Bench Bench
 
 	StaffM   float64 // where the staff stands along the road [m]; NaN: nowhere
 	WeightN  float64 // where the weight was dragged to [N]; NaN: it hangs free
@@ -221,7 +224,7 @@ func (s *State) offers(l words.Lang) bool {
 // stays and Trouble says why.
 func (s *State) answer() {
 	s.stale = false
-	s.Side.stale = true
+	s.Side.stale, s.Bench.stale = true, true
 	if s.Profile == nil {
 		return
 	}

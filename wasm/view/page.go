@@ -5,8 +5,8 @@
 // An element with data-region is a part that is rendered anew by itself when
 // it changed; regions may lie in each other. data-act and data-arg on an
 // element name the action (package state) that a touch asks for. A place of
-// DESIGN.md has its own tree (hillside.go) and its button in the masthead; those
-// yet to come (Counter, Bench) do as it does.
+// DESIGN.md has its own tree (hillside.go, bench.go) and its button in the masthead;
+// one yet to come (Counter) does as they do.
 package view
 
 import (
@@ -22,8 +22,11 @@ import (
 // Page is the whole page: what stands inside <div id="app">.
 func Page(s *state.State) *Node {
 	v := &viewer{State: s, Voice: s.Voice}
-	if s.Side.Open {
+	switch {
+	case s.Side.Open:
 		return v.hillside()
+	case s.Bench.Open:
+		return v.bench()
 	}
 	return El("div", Class("page"),
 		draw.Hatches(),
@@ -74,12 +77,26 @@ func capital(s string) string {
 	return string(unicode.ToUpper(r)) + s[size:]
 }
 
-// elsewhere leads to the other place of the page.
-func (v *viewer) elsewhere() *Node {
-	if v.Side.Open {
-		return button("plain", state.GoTo, state.GoSentence, ID("go-hillside"), v.say(words.GoSentence))
+// elsewhere leads to the other places of the page. Each button bears the id of
+// where one stands, so that the focus finds it on the way back.
+func (v *viewer) elsewhere() Parts {
+	here := state.GoSentence
+	switch {
+	case v.Side.Open:
+		here = state.GoHillside
+	case v.Bench.Open:
+		here = state.GoBench
 	}
-	return button("plain", state.GoTo, state.GoHillside, ID("go-sentence"), v.say(words.GoHillside))
+	var out Parts
+	for _, to := range []struct {
+		place string
+		name  words.Key
+	}{{state.GoSentence, words.GoSentence}, {state.GoHillside, words.GoHillside}, {state.GoBench, words.GoBench}} {
+		if to.place != here {
+			out = append(out, button("plain", state.GoTo, to.place, If(len(out) == 0, ID("go-"+here)), v.say(to.name)))
+		}
+	}
+	return out
 }
 
 func (v *viewer) masthead() *Node {

@@ -44,7 +44,7 @@ func (v *viewer) placeFoot() *Node {
 	var now Part
 	if p := v.Side.Pitch; v.Side.Open && p != nil {
 		now = El("p", Class("now "+wordClass(p.Word)), wordShape(p.Word), Text(v.Voice.Word(p.Word)))
-	} else if v.Answer != nil && !v.Side.Open {
+	} else if v.Answer != nil && !v.Side.Open && !v.Bench.Open {
 		now = El("p", Class("now word-"+v.Answer.Verdict.String()), v.shape(), Text(v.Verdict(v.Answer.Verdict)),
 			El("span", Class("now-room"), Text(v.Headroom(v.Answer.Balance.Headroom()))))
 	}
@@ -57,11 +57,12 @@ func (v *viewer) things(kind keep.Kind) Part {
 	if v.Path != "" && !v.All {
 		return Parts{v.editor(v.Path), v.allButton(kind)}
 	}
+	named := kind != state.Ride && kind != state.Coast // things that have names
 	return Parts{
-		If(kind != state.Ride && !v.All, v.choices(kind)),
+		If(named && !v.All, v.choices(kind)),
 		v.allButton(kind),
 		If(v.All, v.inputs(kind)),
-		If(kind != state.Ride && (v.All || v.AnyChanged(kind)), v.saveAs(kind)),
+		If(named && (v.All || v.AnyChanged(kind)), v.saveAs(kind)),
 	}
 }
 
@@ -231,10 +232,12 @@ func (v *viewer) sectionsNote(chosen bool) Part {
 
 // shape is the answer's shape beside its word: a road that goes over the hill,
 // just reaches its top, or ends in it.
-func (v *viewer) shape() *Node {
+func (v *viewer) shape() *Node { return verdictShape(v.Answer.Verdict) }
+
+func verdictShape(verdict ride.Verdict) *Node {
 	const hill = "M3 28C12 27 16 10 26 8C33 7 37 14 45 15"
 	road, x, y := hill, "43", "14.7"
-	switch v.Answer.Verdict {
+	switch verdict {
 	case ride.Tight:
 		road, x, y = "M3 28C12 27 16 10 26 8", "26", "8"
 	case ride.Short:

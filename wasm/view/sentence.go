@@ -139,6 +139,8 @@ func headOf(kind keep.Kind) words.Key {
 		return words.HeadDay
 	case state.Hill:
 		return words.HeadHill
+	case state.Coast:
+		return words.HeadCoast
 	}
 	return words.HeadRide
 }

@@ -65,7 +65,6 @@ const (
 
 	// DisplayHow: {0} speed now, {1} step.
 	DisplayHow
-	LapTap
 
 	// LapTapAt: {0} what.
 	LapTapAt
@@ -105,8 +104,7 @@ const (
 	HeadDrag
 	DragCrr
 	DragCdA
-	DragNinety
-	DragBefore
+	DragKey
 	DragHeldCrr
 	DragHeldCdA
 
@@ -146,6 +144,7 @@ const (
 	// SpunRub: {0} decibel.
 	SpunRub
 	SpunNoRub
+	UnitClicks
 	TurnPicture
 	CautionCoast
 	CautionMotorOff
