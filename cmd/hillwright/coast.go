@@ -156,5 +156,5 @@ func (o *coastOptions) countClicks(q *ask.Question) error {
 var errClicksUnknown = errors.New("the clicks per turn of the wheel are not known; give them with -set coast.clicks_per_turn=…, or count them with -rolled FILE, a recording of the wheel rolled through counted turns")
 
 func errNoFall(name string) error {
-	return fmt.Errorf("%s: clicks were heard, but nowhere do they slow down as in a coast-down; expected at least 6 s of coasting, without pedalling or braking", name)
+	return fmt.Errorf("%s: no clicks that slow down as in a coast-down were found; expected at least 6 s of coasting, without pedalling or braking", name)
 }

@@ -43,23 +43,27 @@ func measure(q *ask.Question, files []heard, back map[int]bool) *measured {
 			r.Back = back[i]
 			add(&f, r, r.Points)
 		} else {
+			falls := 0
 			for _, s := range h.sound.Stretches {
-				if !s.Falls || !q.ClicksKnown() {
+				if !s.Falls {
 					continue
 				}
-				r := q.RunOf(s.Points, back[i])
-				add(&f, r, q.RunOf(s.Curve, false).Points)
+				if falls++; q.ClicksKnown() {
+					r := q.RunOf(s.Points, back[i])
+					add(&f, r, q.RunOf(s.Curve, false).Points)
+				}
+			}
+			if falls == 0 && m.refused == nil {
+				m.refused = errNoFall(h.name)
 			}
 		}
 		m.files = append(m.files, f)
 	}
-	for i, h := range files {
-		if h.sound != nil && len(m.files[i].runs) == 0 {
-			if m.refused = errNoFall(h.name); !q.ClicksKnown() {
-				m.refused = errClicksUnknown
-			}
-			return m
-		}
+	if m.refused == nil && !q.ClicksKnown() && len(runs) < len(files) {
+		m.refused = errClicksUnknown
+	}
+	if m.refused != nil {
+		return m
 	}
 	if m.result, m.refused = coast.Fit(runs, m.setup); m.refused == nil {
 		m.bike[0], m.bike[1] = q.BikeDrag(m.result)

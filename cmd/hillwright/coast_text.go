@@ -25,7 +25,7 @@ func writeCoast(out io.Writer, q *ask.Question, m *measured, v words.Voice) erro
 		{r.Crr.Held, v.Say(words.DragHeldCrr)},
 		{r.CdAM2.Held, v.Say(words.DragHeldCdA)},
 		{!r.BothWays, v.Say(words.DragOneWay)},
-		{!r.Crr.Held && !r.CdAM2.Held, v.Say(words.DragLean, v.Number(r.Correlation, 2))},
+		{!r.Crr.Held && !r.CdAM2.Held, v.Lean(r.Correlation)},
 		{r.BothWays, v.Say(words.DragRoad, v.GradeFine(unit.Grade(r.Grade.Value))+" "+v.GradeError(half(r.Grade)), v.Speed(r.HeadMps.Value)+" ± "+v.Speed(half(r.HeadMps)))},
 	} {
 		if note.yes {

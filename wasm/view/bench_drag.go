@@ -30,10 +30,6 @@ func (v *viewer) drag() *Node {
 		}
 		return region("section", "bench-drag", With("aria-labelledby", "drag-title"), head, El("p", Class("problem"), With("role", "alert"), Text(why)))
 	}
-	lean := words.DragFree
-	if math.Abs(r.Correlation) > 0.6 {
-		lean = words.DragLean
-	}
 	half := func(e coast.Estimate) float64 { return (e.High - e.Low) / 2 }
 	setup := v.Question.CoastSetup(0)
 	notes := Parts{Class("notes-list")}
@@ -45,7 +41,9 @@ func (v *viewer) drag() *Node {
 	note(r.Crr.Held, words.DragHeldCrr)
 	note(r.CdAM2.Held, words.DragHeldCdA)
 	note(!r.BothWays, words.DragOneWay)
-	note(!r.Crr.Held && !r.CdAM2.Held, lean, v.Voice.Number(r.Correlation, 2))
+	if !r.Crr.Held && !r.CdAM2.Held {
+		notes = append(notes, El("li", Text(v.Lean(r.Correlation))))
+	}
 	note(r.BothWays, words.DragRoad, v.gradeWith(r.Grade.Value, half(r.Grade)), v.Speed(r.HeadMps.Value)+" ± "+v.Speed(half(r.HeadMps)))
 	note(r.Wander > 0.01, words.DragGusts)
 	rolling := setup.MassKg.Value * unit.Gravity * r.Crr.Value

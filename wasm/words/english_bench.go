@@ -39,7 +39,7 @@ var englishBench = [keys]string{
 	SoundSave:          "save the recording (WAV)",
 	SoundAgain:         "listen again",
 	SoundStopped:       "Stopped. The recording is still at hand.",
-	SoundNoFall:        "Clicks were heard, but nowhere do they slow down as in a coast-down. Expected: at least 6 s of coasting, without pedalling or braking.",
+	SoundNoFall:        "No clicks that slow down as in a coast-down were found. Expected: at least 6 s of coasting, without pedalling or braking.",
 	SoundCut:           "The file ends or is damaged at {0} s; what lies before is used.",
 	MarksHow:           "Set marks every {0}. Tap at each mark as the front wheel passes it.",
 	DisplayHow:         "Tap the moment the display falls to {0}, then at each {1} less.",

@@ -39,7 +39,7 @@ var germanBench = [keys]string{
 	SoundSave:          "Aufnahme sichern (WAV)",
 	SoundAgain:         "erneut anhören",
 	SoundStopped:       "Abgebrochen. Die Aufnahme ist noch da.",
-	SoundNoFall:        "Klicks waren zu hören, werden aber nirgends langsamer wie beim Ausrollen. Erwartet: mindestens 6 s Ausrollen, ohne zu treten oder zu bremsen.",
+	SoundNoFall:        "Es wurden keine Klicks gefunden, die wie beim Ausrollen langsamer werden. Erwartet: mindestens 6 s Ausrollen, ohne zu treten oder zu bremsen.",
 	SoundCut:           "Die Datei endet oder ist beschädigt bei {0} s; was davor liegt, wird verwendet.",
 	MarksHow:           "Alle {0} eine Marke setzen. Bei jeder Marke tippen, wenn das Vorderrad sie passiert.",
 	DisplayHow:         "In dem Moment tippen, in dem die Anzeige auf {0} fällt, dann bei jedem {1} weniger.",

@@ -104,6 +104,18 @@ func (v Voice) Area(m2 float64) string { return v.with(v.Number(m2, 3), "m²") }
 // Seconds writes a time [s] to a tenth.
 func (v Voice) Seconds(s float64) string { return v.with(v.Number(s, 1), "s") }
 
+// leans is from which correlation on Crr and CdA are said to lean on each
+// other.
+const leans = 0.6
+
+// Lean says how well Crr and CdA are told apart, by their correlation.
+func (v Voice) Lean(correlation float64) string {
+	if correlation < -leans {
+		return v.Say(DragLean, v.Number(correlation, 2))
+	}
+	return v.Say(DragFree, v.Number(correlation, 2))
+}
+
 // Torque writes a small torque [N·m].
 func (v Voice) Torque(nm float64) string { return v.with(v.Number(nm, 3), "N·m") }
 
