@@ -23,7 +23,7 @@ type Program struct {
 // up to 70 % in work on many small strings; the physics runs as fast as before.
 var smaller = []string{
 	"-gcflags=all=-l",
-	"-gcflags=hillwright/physics/...=",
+	"-gcflags=hillwright/physics/...=", "-gcflags=github.com/hajimehoshi/go-mp3/...=",
 	"-gcflags=math=", "-gcflags=math/...=", "-gcflags=bytes=", "-gcflags=cmp=", "-gcflags=slices=", "-gcflags=sort=",
 	"-gcflags=strconv=", "-gcflags=internal/strconv=", "-gcflags=unicode/utf8=",
 }

@@ -36,7 +36,7 @@ type band struct {
 
 // centres are the middles of the bands [Hz]. Pawls ring at 2 to 8 kHz (common
 // practice, no source); a card on the spokes lower.
-var centres = []float64{1000, 1900, 3600, 6400, 10500}
+var centres = []float64{1100, 2100, 4000, 7500}
 
 func newFront(rateHz int) front {
 	hz := float64(rateHz)

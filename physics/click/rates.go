@@ -178,7 +178,7 @@ func (r *rates) score(power []float64, factor int, out []float64) {
 	}
 	mean = mean/float64(len(power)) + 1e-9
 	for k, p := range power {
-		power[k] = math.Log1p(p / mean)
+		power[k] = min(strongest, math.Sqrt(p/mean))
 	}
 	perHz := size * float64(factor) / r.hz
 	top := float64(len(power) - 2)
@@ -204,9 +204,14 @@ func (r *rates) score(power []float64, factor int, out []float64) {
 	}
 }
 
-// noiseScatter is about the standard deviation of ln(1 + power/mean) where the
-// power is that of noise.
-const noiseScatter = 0.5
+// A line of the spectrum counts by its amplitude beside the mean, up to
+// strongest, so that a hum does not count for much more than a click's
+// harmonic; noiseScatter is the standard deviation of that where the line is of
+// noise (Rayleigh's distribution: √(1 − π/4)).
+const (
+	strongest    = 6
+	noiseScatter = 0.463
+)
 
 // weights are those of the harmonics: each next one counts a little less.
 var weights = func() (w [harmonics + 1]float64) {
@@ -219,7 +224,7 @@ var weights = func() (w [harmonics + 1]float64) {
 // The picture is at most so large.
 const (
 	pictureColumns = 480
-	pictureRows    = 110
+	pictureRows    = 160
 )
 
 // picture gives the spectrogram in a size for drawing: of several columns or

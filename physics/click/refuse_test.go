@@ -32,8 +32,8 @@ func TestRefuses(t *testing.T) {
 		"a steady machine": quiet(tone(func(t float64) float64 { return math.Sin(2*math.Pi*3000*t) * (1 + math.Sin(2*math.Pi*25*t)) }), 0.2),
 		"pedalling":        quiet(make([]float64, n), 0),
 	}
-	for seed := range uint64(6) {
-		name := string(rune('0' + seed))
+	for seed := range uint64(16) {
+		name := string(rune('a' + seed))
 		rows["speech "+name] = quiet(synth.Voice(n, rate, seed), 0.4)
 		rows["music "+name] = quiet(synth.Music(n, rate, 1.5+0.4*float64(seed), seed), 0.5)
 		white := synth.Scene{RateHz: rate, LengthS: 30, SNRdB: 0, Noise: synth.Colour(seed % 3), Speed: func(float64) float64 { return 0 }, CircumferenceM: 2, ClicksPerTurn: 20, Seed: seed}

@@ -68,7 +68,7 @@ func (l *Listener) stretch(s span) (Stretch, bool) {
 	if len(out.Points) < 4 || len(out.Curve) < 8 || out.ToS()-out.FromS() < shortestS {
 		return out, false
 	}
-	out.Falls = falls(out.Curve)
+	out.Falls = falls(out.Curve, out.Points)
 	out.between = l.betweens(&out)
 	return out, true
 }
@@ -236,10 +236,10 @@ func without(points []Point, logs []float64, i int) float64 {
 // leastFallS, and is seldom faster than before.
 const (
 	leastFall  = 0.15
-	leastFallS = 4
+	leastFallS = 6
 )
 
-func falls(curve []Point) bool {
+func falls(curve, points []Point) bool {
 	first, last := curve[0], curve[len(curve)-1]
 	if last.AtS-first.AtS < leastFallS {
 		return false
@@ -251,5 +251,32 @@ func falls(curve []Point) bool {
 		}
 		low = min(low, p.RateHz)
 	}
-	return last.RateHz < (1-leastFall)*first.RateHz && rises*10 < len(curve)
+	return last.RateHz < (1-leastFall)*first.RateHz && rises*10 < len(curve) && smooth(points)
+}
+
+// mostBend is by how much of itself a rate may bend away from the line through
+// its neighbours, in the middle of all bends: a wheel's inertia keeps it far
+// below, the pitch of a voice or a tune goes beyond.
+const mostBend = 0.004
+
+// leastFound is the part of a stretch in whose windows the clicks must have been
+// found.
+const leastFound = 0.65
+
+// smooth tells that a rate changes as that of a wheel does, and that it was
+// found nearly everywhere.
+func smooth(points []Point) bool {
+	var bends []float64
+	found := 0.0
+	for i, p := range points {
+		found += windowS(p.RateHz)
+		if i == 0 || i+1 == len(points) {
+			continue
+		}
+		a, b := points[i-1], points[i+1]
+		part := (p.AtS - a.AtS) / (b.AtS - a.AtS)
+		line := math.Log(a.RateHz) + part*math.Log(b.RateHz/a.RateHz)
+		bends = append(bends, math.Abs(math.Log(p.RateHz)-line)-2*p.ErrorHz/p.RateHz)
+	}
+	return median(bends) < mostBend && found > leastFound*(points[len(points)-1].AtS-points[0].AtS)
 }

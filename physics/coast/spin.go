@@ -60,7 +60,7 @@ func Spin(points []Point, inertiaKgM2 Value, circumferenceM, densityKgM3 float64
 	out.RestS = q.derived(func(crr, cda float64) float64 { return restS(unit.Gravity*crr, 0.5*densityKgM3*cda/asMass) }, 0)
 	usual := SpunMps * (road.Bearings(SpunMps)/2 + 0.5*densityKgM3*wheelWindM2*SpunMps*SpunMps)
 	out.Typical = Estimate{Value: usual, Low: typicalLow * usual, High: typicalHigh * usual}
-	out.Drags = out.PowerW.Low > out.Typical.High
+	out.Drags = out.PowerW.Value > out.Typical.High
 	return out, nil
 }
 

@@ -37,7 +37,7 @@ const (
 	clicksTop    = 8.0
 	clicksBottom = 26.0
 	mostAcross   = 160 // cells
-	mostUp       = 64
+	mostUp       = 90
 )
 
 // clicksPlot is the geometry of the picture.
@@ -282,7 +282,7 @@ func (p *clicksPlot) frame() dom.Parts {
 		lines.across(p.plot.x0)
 		labels = append(labels, label{lines: []string{p.Voice.Number(v/p.unit, 0)}, x: p.plot.x0 - 6, y: y + 4, px: smallPx, anchor: fromEnd}.node())
 	}
-	labels = append(labels, label{lines: []string{p.unitName}, x: p.plot.x0 + 5, y: p.plot.y0 + 11, px: smallPx, class: "halo"}.node())
+	labels = append(labels, label{lines: []string{p.unitName}, x: p.plot.x0 + 34, y: p.plot.y0 + 11, px: smallPx, class: "halo"}.node())
 	for s := math.Ceil(p.firstS/p.tidyS) * p.tidyS; s <= p.lastS; s += p.tidyS {
 		x := p.x(s)
 		lines.move(x, p.plot.y1)

@@ -122,6 +122,13 @@ func (s *State) ClickView(r *keep.Run) *draw.ClickView {
 			v.Line = append(v.Line, draw.Spot{AtS: (r.AtS[i] + r.AtS[i-1]) / 2, Is: speed, Error: speed * math.Sqrt2 * r.Error[i] / took})
 		}
 	}
+	// Ends that are not cut are those of the line.
+	if len(v.Line) > 0 && r.FromS <= r.AtS[0] {
+		v.FromS = min(r.FromS, v.Line[0].AtS)
+	}
+	if n := len(v.Line); n > 0 && r.ToS >= r.AtS[len(r.AtS)-1] {
+		v.ToS = max(r.ToS, v.Line[n-1].AtS)
+	}
 	return v
 }
 

@@ -1,7 +1,6 @@
 package view
 
 import (
-	"hillwright/physics/unit"
 	. "hillwright/wasm/dom"
 	"hillwright/wasm/draw"
 	"hillwright/wasm/keep"
@@ -18,7 +17,7 @@ func (v *viewer) bench() *Node {
 	} else {
 		left, right = Parts{v.benchJob(), v.place(), v.benchSound()}, Parts{v.drag(), v.intoBike(), v.runs()}
 	}
-	return El("div", Class("page at-bench"),
+	return El("div", Class("page by-thumb at-bench"),
 		draw.Hatches(),
 		v.masthead(),
 		El("main",
@@ -106,5 +105,5 @@ func (v *viewer) benchFoot() *Node {
 
 // gradeWith writes a grade that was found, with half its 90 % interval.
 func (v *viewer) gradeWith(value, half float64) string {
-	return v.GradeFine(unit.Grade(value)) + " " + v.GradeError(half)
+	return v.Voice.Number(100*value, 2) + " % ± " + v.Voice.Number(100*half, 2) + " %"
 }

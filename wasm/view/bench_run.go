@@ -18,7 +18,7 @@ func (v *viewer) runs() *Node {
 	}
 	var inside Part = El("p", Class("hint"), v.say(words.RunsNone))
 	if len(list) > 0 {
-		inside = El("ol", With("reversed", "true"), cards)
+		inside = El("ul", cards)
 	}
 	return region("section", "bench-runs", With("aria-labelledby", "runs-title"),
 		El("h2", ID("runs-title"), With("tabindex", "-1"), v.say(words.HeadRuns)), inside)
@@ -53,8 +53,7 @@ func (v *viewer) run(r *keep.Run, number int) *Node {
 		El("div", Class("canvas"), draw.Clicks(view, title, says, state.CutHandle, args, names)),
 		If(view.Picture != nil, El("p", Class("hint"), v.say(words.ClickPictureNote))),
 		pair(words.RunWay, state.RunWay, "out", "back", words.RunOut, words.RunBack, !r.Back),
-		v.cutter(names[0], args[0], v.Seconds(r.FromS)),
-		v.cutter(names[1], args[1], v.Seconds(r.ToS)),
+		El("div", Class("cutters"), v.cutter(names[0], args[0], v.Seconds(r.FromS)), v.cutter(names[1], args[1], v.Seconds(r.ToS))),
 		El("div", Class("row"),
 			pair(words.RunUsed, state.RunUse, "yes", "no", words.RunUse, words.RunLeave, !r.LeftOut),
 			button("plain", state.RunForget, r.ID, v.say(words.RunForget))))

@@ -12,7 +12,7 @@ import (
 // measured, go or don't, the way down, the group, what was read. What is
 // touched most lies at the foot of the screen, under the thumb.
 func (v *viewer) hillside() *Node {
-	return El("div", Class("page at-hillside"),
+	return El("div", Class("page by-thumb at-hillside"),
 		draw.Hatches(),
 		v.masthead(),
 		El("main",
