@@ -17,10 +17,13 @@ const (
 
 // front turns samples into the onset envelope.
 type front struct {
-	every int // samples for each value of the envelope
-	have  int
-	high  [2]biquad // takes off wind and rumble
-	bands []band
+	thin    int // samples that are averaged to one, at high rates
+	thick   float64
+	thinned int
+	every   int // such for each value of the envelope
+	have    int
+	high    [2]biquad // takes off wind and rumble
+	bands   []band
 
 	energy float64 // loudness of the last value
 	meanBy float64 // weight of a new value in a band's mean
@@ -38,9 +41,14 @@ type band struct {
 // practice, no source); a card on the spokes lower.
 var centres = []float64{1100, 2100, 4000, 7500}
 
+// enoughHz is the sampling rate that is enough: twice of it or more is thinned.
+const enoughHz = 20_000
+
 func newFront(rateHz int) front {
-	hz := float64(rateHz)
-	f := front{every: max(1, int(math.Round(hz/envelopeAbout)))}
+	// What lies above 10 kHz tells no more than what lies below.
+	thin := max(1, rateHz/enoughHz)
+	hz := float64(rateHz) / float64(thin)
+	f := front{thin: thin, every: max(1, int(math.Round(hz/envelopeAbout)))}
 	f.meanBy = 1 - math.Exp(-float64(f.every)/hz/meanS)
 	f.high[0], f.high[1] = highPass(600/hz, 0.54), highPass(600/hz, 1.31) // Butterworth of fourth order
 	for _, c := range centres {
@@ -53,6 +61,14 @@ func newFront(rateHz int) front {
 
 // take takes a sample; true when a value of the envelope is ready.
 func (f *front) take(x float64) bool {
+	if f.thin > 1 {
+		f.thick += x
+		if f.thinned++; f.thinned < f.thin {
+			return false
+		}
+		x = f.thick / float64(f.thin)
+		f.thick, f.thinned = 0, 0
+	}
 	x = f.high[1].next(f.high[0].next(x))
 	for i := range f.bands {
 		b := &f.bands[i]
@@ -80,8 +96,15 @@ func (f *front) onset() uint8 {
 		e := b.energy / float64(f.every)
 		b.energy = 0
 		f.energy += e
-		sum += min(clip, math.Sqrt(e/(b.mean+1e-13)))
-		b.mean += by * (min(e, slapFactor*b.mean+1e-10) - b.mean)
+		ratio := math.Sqrt(e / (b.mean + 1e-13))
+		if ratio > clip {
+			ratio = clip
+		}
+		sum += ratio
+		if most := slapFactor*b.mean + 1e-10; e > most {
+			e = most
+		}
+		b.mean += by * (e - b.mean)
 	}
 	return uint8(sum/float64(len(f.bands))/onsetUnit + 0.5)
 }

@@ -53,7 +53,9 @@ func NewListener(rateHz int) (*Listener, error) {
 	return l, nil
 }
 
-func (l *Listener) envelopeHz() float64 { return float64(l.rateHz) / float64(l.front.every) }
+func (l *Listener) envelopeHz() float64 {
+	return float64(l.rateHz) / float64(l.front.every*l.front.thin)
+}
 
 // Seconds is how much was heard [s].
 func (l *Listener) Seconds() float64 { return float64(l.count) / float64(l.rateHz) }

@@ -16,8 +16,8 @@ const (
 // [1/s], an even number of them. A coast-down has 0 to about −0.2 where it is
 // slow, a roll-out also rises.
 var chirps = [2][]float64{
-	{0, 0.03, -0.02, -0.045, -0.08, -0.13, -0.2, 0.1},
-	{0, 0.06, -0.03, -0.06, -0.1, -0.16, -0.25, -0.4},
+	{0, 0.04, -0.03, -0.07, -0.13, -0.22},
+	{0, 0.06, -0.05, -0.12, -0.22, -0.4},
 }
 
 // rates is the click-rate spectrogram: for each hop one column of scores, by
@@ -89,9 +89,11 @@ const (
 
 func (r *rates) column(onset []uint8) {
 	at := r.centre(r.next)
-	r.next++
 	r.salience(onset, at, 1, r.best)
-	r.salience(onset, at, slowFactor, r.slow)
+	if r.next%2 == 0 { // the long window hardly changes from one hop to the next
+		r.salience(onset, at, slowFactor, r.slow)
+	}
+	r.next++
 	for i, rate := range r.grid {
 		fast := math.Log2(rate/slowBelow) / math.Log2(float64(fastAbove)/slowBelow)
 		fast = max(0, min(1, fast))
@@ -178,7 +180,10 @@ func (r *rates) score(power []float64, factor int, out []float64) {
 	}
 	mean = mean/float64(len(power)) + 1e-9
 	for k, p := range power {
-		power[k] = min(strongest, math.Sqrt(p/mean))
+		if p > strongest*strongest*mean {
+			p = strongest * strongest * mean
+		}
+		power[k] = math.Sqrt(p / mean)
 	}
 	perHz := size * float64(factor) / r.hz
 	top := float64(len(power) - 2)

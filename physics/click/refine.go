@@ -224,7 +224,7 @@ func (f *fitter) powersTo(h int, df, dc float64) (out [most + 1]float64) {
 // ever smaller steps.
 func (f *fitter) climb(h int, df, dc, stepF, stepC float64) (float64, float64) {
 	best := f.power(h, df, dc)
-	for range 11 {
+	for range 8 {
 		bf, bc := df, dc
 		for _, d := range [...][2]float64{{1, 0}, {-1, 0}, {0, 1}, {0, -1}, {1, 1}, {-1, -1}} {
 			f2, c2 := df+d[0]*stepF, dc+d[1]*stepC

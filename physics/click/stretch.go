@@ -257,11 +257,11 @@ func falls(curve, points []Point) bool {
 // mostBend is by how much of itself a rate may bend away from the line through
 // its neighbours, in the middle of all bends: a wheel's inertia keeps it far
 // below, the pitch of a voice or a tune goes beyond.
-const mostBend = 0.004
+const mostBend = 0.002
 
 // leastFound is the part of a stretch in whose windows the clicks must have been
 // found.
-const leastFound = 0.65
+const leastFound = 0.7
 
 // smooth tells that a rate changes as that of a wheel does, and that it was
 // found nearly everywhere.
