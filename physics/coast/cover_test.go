@@ -3,6 +3,7 @@ package coast
 import (
 	"math"
 	"math/rand/v2"
+	"os"
 	"testing"
 
 	"hillwright/physics/synth"
@@ -123,16 +124,19 @@ var scenes = []struct {
 	}, nil, 0},
 }
 
-// The 90 % intervals hold the truth in at least 90 % of 200 seeded fits, and
+// The 90 % intervals hold the truth in at least 90 % of 200 seeded fits (of 60 in the quick run), and
 // clean runs give it to 5 % and 8 %.
 func TestIntervalsHoldTheTruth(t *testing.T) {
 	for _, row := range scenes {
 		t.Run(row.name, func(t *testing.T) {
 			t.Parallel()
-			const fits = 200
+			fits := uint64(60)
+			if os.Getenv("HILLWRIGHT_FULL") != "" {
+				fits = 200
+			}
 			var inCrr, inCdA, near, heldCrr, heldCdA, wideCrr, wideCdA float64
 			done := 0.0
-			for seed := range uint64(fits) {
+			for seed := range fits {
 				w := newWorld(seed)
 				if row.known != nil {
 					row.known(&w.setup)
@@ -164,7 +168,11 @@ func TestIntervalsHoldTheTruth(t *testing.T) {
 			}
 			t.Logf("Crr held in %.1f %%, CdA in %.1f %% of %.0f; near %.1f %%; at prior %.0f, %.0f; half widths %.1f %%, %.1f %%",
 				100*inCrr/done, 100*inCdA/done, done, 100*near/done, heldCrr, heldCdA, 100*wideCrr/done, 100*wideCdA/done)
-			if done < 0.95*fits || inCrr < 0.9*done || inCdA < 0.9*done || near < row.close*done {
+			slack := 0.0
+			if fits < 200 {
+				slack = 2 // of few the share scatters
+			}
+			if done < 0.95*float64(fits) || inCrr < 0.9*done-slack || inCdA < 0.9*done-slack || near < row.close*done {
 				t.Errorf("intervals hold the truth in %.0f and %.0f of %.0f, near in %.0f", inCrr, inCdA, done, near)
 			}
 		})

@@ -50,13 +50,13 @@ func Fit(runs []Run, s Setup) (*Result, error) {
 // solve settles, looks at what is left, and settles again with it.
 func solve(runs []Run, s *Setup, heldCrr, heldCdA bool) (*problem, error) {
 	q := newProblem(runs, s, heldCrr, heldCdA)
-	if !q.settle() {
+	if !q.settle(1e-3) {
 		return nil, &Error{Kind: TooNoisy}
 	}
-	for range 2 {
+	for _, enough := range []float64{1e-4, 1e-7} {
 		q.widen()
 		q.judge()
-		if !q.settle() {
+		if !q.settle(enough) {
 			return nil, &Error{Kind: TooNoisy}
 		}
 	}

@@ -187,9 +187,10 @@ func (q *problem) finish(e *normal, scale float64) (square float64) {
 }
 
 // settle takes Gauss–Newton steps, shortened where they do not help (Levenberg
-// 1944, Marquardt 1963), until they bring nothing more or are many; false where
+// 1944, Marquardt 1963), until they bring less than a part of the sum of squares or are
+// many; false where
 // the numbers leave all bounds.
-func (q *problem) settle() bool {
+func (q *problem) settle(enough float64) bool {
 	damp := 1e-6
 	for range 60 {
 		e := q.normal(q.linearise(), q.wander)
@@ -205,7 +206,7 @@ func (q *problem) settle() bool {
 		kept := append([]float64(nil), q.p...)
 		for ; ; damp *= 10 {
 			better := square - q.stepped(&e, kept, damp)
-			if better > 1e-7*(1+square) {
+			if better > enough*(1+square) {
 				damp = math.Max(1e-9, damp/10)
 				break
 			}
@@ -267,6 +268,7 @@ func (q *problem) cost() float64 {
 // than stated, where the readings are likeliest (restricted likelihood;
 // Patterson & Thompson, Biometrika 58 (1971) 545).
 func (q *problem) judge() {
+	near := q.wander // once found, it is only found better
 	l := q.linearise()
 	at := func(w wander) (cost, scale float64) {
 		e := q.normal(l, w)
@@ -298,9 +300,13 @@ func (q *problem) judge() {
 			best, scale, q.wander = cost, s, w
 		}
 	}
-	for _, memoryS := range []float64{0.5, 2, 6} {
-		for far := 5e-4; far < 1; far *= 2.5 {
-			try(wander{far, memoryS})
+	if near.memoryS > 0 {
+		try(near)
+	} else {
+		for _, memoryS := range []float64{0.5, 2, 6} {
+			for far := 5e-4; far < 1; far *= 2.5 {
+				try(wander{far, memoryS})
+			}
 		}
 	}
 	for _, by := range []float64{1.4, 1 / 1.4, 1.18, 1 / 1.18} {

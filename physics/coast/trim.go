@@ -33,13 +33,20 @@ func Trim(points []Point) (fromS, toS float64) {
 		off[i] = math.Abs(s.mps2 - even - square*s.mps*s.mps)
 	}
 	limit := math.Max(trimMps2, trimFactor*1.4826*median(append([]float64(nil), off...)))
-	// The outermost slopes that fit, with a next one that fits too.
-	first, last := 0, len(slopes)-1
-	for first < last && (off[first] > limit || off[first+1] > limit) {
-		first++
-	}
-	for last > first && (off[last] > limit || off[last-1] > limit) {
-		last--
+	// The longest part that fits, over single slopes that do not.
+	first, last, begun := 0, -1, -1
+	for i := range slopes {
+		switch {
+		case off[i] <= limit:
+			if begun < 0 {
+				begun = i
+			}
+			if i-begun > last-first {
+				first, last = begun, i
+			}
+		case i > 0 && off[i-1] > limit:
+			begun = -1
+		}
 	}
 	if last-first < len(slopes)/3 {
 		return fromS, toS

@@ -60,8 +60,8 @@ func (m *mpeg) read(dst []float32) (n int, err error) {
 			if got == 0 && err == io.EOF {
 				return n, io.EOF
 			}
-			if got == 0 && err != nil {
-				return n, errCut
+			if got == 0 {
+				return n, errCut // also where the decoder says nothing at all
 			}
 		}
 		b := m.buf[m.at:]
