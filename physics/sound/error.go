@@ -49,7 +49,7 @@ type Error struct {
 	Got   int
 }
 
-const remedy = "; expected MP3 or WAV: record it here, choose MP3 or WAV in the recorder's settings, or convert the file"
+const remedy = "; expected MP3 or WAV: record it on the page, choose MP3 or WAV in the recorder's settings, or convert the file"
 
 func (e *Error) Error() string {
 	switch e.Kind {

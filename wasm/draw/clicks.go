@@ -261,12 +261,13 @@ func cell(d []byte, x, y, w, h int) []byte {
 	if w < 1 {
 		return d
 	}
-	d = strconv.AppendInt(append(d, 'M'), int64(x), 10)
-	d = strconv.AppendInt(append(d, ' '), int64(y), 10)
-	d = strconv.AppendInt(append(d, 'h'), int64(w), 10)
-	d = strconv.AppendInt(append(d, 'v'), int64(h), 10)
-	d = strconv.AppendInt(append(d, 'h'), int64(-w), 10)
-	return append(d, 'z')
+	number := func(op byte, v int) { d = strconv.AppendInt(append(d, op), int64(v), 10) }
+	number('M', x)
+	number(' ', y)
+	number('H', x+w)
+	number('V', y+h)
+	number('H', x)
+	return append(d, 'Z')
 }
 
 // frame is the scales: speed upward, seconds along.

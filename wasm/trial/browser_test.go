@@ -35,11 +35,18 @@ func theBrowser(t testing.TB) context.Context {
 			running.err = err
 			return
 		}
+		heard, err := fakeSound(profile)
+		if err != nil {
+			running.err = err
+			return
+		}
 		flags := append(chromedp.DefaultExecAllocatorOptions[:],
 			chromedp.ExecPath(path), chromedp.NoSandbox, chromedp.DisableGPU, chromedp.UserDataDir(profile),
 			chromedp.Flag("disable-quic", true), chromedp.Flag("disable-component-update", true),
 			chromedp.Flag("disable-features", "Translate,AutofillServerCommunication,OptimizationHints"),
 			chromedp.Flag("lang", "en-GB"),
+			chromedp.Flag("use-fake-ui-for-media-stream", true), chromedp.Flag("use-fake-device-for-media-stream", true),
+			chromedp.Flag("use-file-for-fake-audio-capture", heard),
 			chromedp.ProxyServer(address), chromedp.Flag("proxy-bypass-list", "127.0.0.1"))
 		start, stop := chromedp.NewExecAllocator(context.Background(), flags...)
 		ctx, end := chromedp.NewContext(start)

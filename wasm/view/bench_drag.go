@@ -1,6 +1,7 @@
 package view
 
 import (
+	"errors"
 	"math"
 
 	"hillwright/physics/coast"
@@ -25,7 +26,8 @@ func (v *viewer) drag() *Node {
 			return region("section", "bench-drag", Bare("hidden"))
 		}
 		why := v.Problem(v.Bench.Refused)
-		if !v.Question.ClicksKnown() {
+		var e *coast.Error
+		if !v.Question.ClicksKnown() && errors.As(v.Bench.Refused, &e) && e.Kind == coast.NoRun {
 			why = v.Voice.Say(words.BenchClicksMissing)
 		}
 		return region("section", "bench-drag", With("aria-labelledby", "drag-title"), head, El("p", Class("problem"), With("role", "alert"), Text(why)))

@@ -136,7 +136,7 @@ var englishBench = [keys]string{
 	ClickNoSingle:      "Single clicks cannot be told apart. Roll slowly, the phone close to the hub, in a quiet place.",
 	ClickDamaged:       "The numbers of the recording are damaged. Open the recording again.",
 	CoastNoRun:         "No run counts yet: record a coast-down, or use one of those below.",
-	CoastBadNumber:     "A time or a speed is no number or out of order.",
+	CoastBadNumber:     "A time or a speed is no number, out of order, or beyond what a bike rides.",
 	CoastTooFew:        "Run {0} has {1} readings; expected at least {2}.",
 	CoastTooShort:      "Run {0} lasts {1} s; expected at least {2} s. Coast longer, on a longer road.",
 	CoastTooSlow:       "Run {0} begins at {1}; expected at least {2}. Start faster.",

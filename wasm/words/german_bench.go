@@ -136,7 +136,7 @@ var germanBench = [keys]string{
 	ClickNoSingle:      "Einzelne Klicks sind nicht zu unterscheiden. Langsam rollen, Telefon nahe an der Nabe, an ruhigem Ort.",
 	ClickDamaged:       "Die Zahlen der Aufnahme sind beschädigt. Die Aufnahme neu öffnen.",
 	CoastNoRun:         "Noch zählt keine Fahrt: ein Ausrollen aufnehmen oder eine der unteren verwenden.",
-	CoastBadNumber:     "Eine Zeit oder Geschwindigkeit ist keine Zahl oder nicht in Reihenfolge.",
+	CoastBadNumber:     "Eine Zeit oder Geschwindigkeit ist keine Zahl, nicht in Reihenfolge oder jenseits dessen, was ein Rad fährt.",
 	CoastTooFew:        "Fahrt {0} hat {1} Ablesungen; erwartet: mindestens {2}.",
 	CoastTooShort:      "Fahrt {0} dauert {1} s; erwartet: mindestens {2} s. Länger ausrollen, auf längerer Straße.",
 	CoastTooSlow:       "Fahrt {0} beginnt mit {1}; erwartet: mindestens {2}. Schneller beginnen.",
