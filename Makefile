@@ -10,7 +10,10 @@ SOURCES = build cmd physics site wasm
 # The packages of the page that also run outside a browser.
 NATIVE = $$($(GO) list ./wasm/... | grep -v /wasm/trial)
 
-.PHONY: run pack test check bench fuzz pictures binary chromium
+# What the full run of the tests needs of Debian.
+TOOLS = chromium ffmpeg lame
+
+.PHONY: run pack test check bench fuzz pictures binary tools
 
 # Packs the demo shop (or SHOP=folder), serves it and prints its address.
 run: pack
@@ -23,7 +26,7 @@ binary:
 	$(GO) build -trimpath -o bin/hillwright ./cmd/hillwright
 
 # The quick first, so that what is plainly wrong shows at once.
-test: check chromium testdata/node_modules/.package-lock.json
+test: check tools testdata/node_modules/.package-lock.json
 	HILLWRIGHT_FULL=1 $(GO) test -timeout 15m ./physics/... ./build/... ./cmd/... ./site/...
 	$(GO) test $(NATIVE)
 	HILLWRIGHT_FULL=1 $(GO) test -count=1 -timeout 15m ./wasm/trial/...
@@ -37,7 +40,7 @@ check:
 	GOOS=js GOARCH=wasm bin/staticcheck ./wasm/...
 
 # The computation natively, then the page in the browser.
-bench: chromium
+bench: tools
 	$(GO) test -run '^$$' -bench . -benchmem ./physics/... ./build/... $(NATIVE)
 	HILLWRIGHT_FULL=1 $(GO) test -run '^$$' -bench . -benchtime 5x -timeout 30m ./wasm/trial/...
 
@@ -46,21 +49,22 @@ fuzz:
 	@set -e; for package in $$($(GO) list ./physics/... ./build/... ./cmd/...) $(NATIVE); do \
 		for test in $$($(GO) test -list '^Fuzz' $$package | grep '^Fuzz' || true); do \
 			echo "$$package $$test"; \
-			$(GO) test -run '^$$' -fuzz "^$$test\$$" -fuzztime $(FUZZTIME) $$package; \
+			$(GO) test -run '^$$' -fuzz "^$$test\$$" -fuzztime $(FUZZTIME) -fuzzminimizetime 1s $$package; \
 		done; \
 	done
 
 # The README's pictures, taken from the page.
-pictures: chromium
-	HILLWRIGHT_FULL=1 HILLWRIGHT_PICTURES=1 $(GO) test -count=1 -run Pictures -v ./wasm/trial/...
+pictures: tools
+	HILLWRIGHT_FULL=1 HILLWRIGHT_PICTURES=1 $(GO) test -count=1 -run Picture -v ./wasm/trial/...
 
-# The browser for the tests.
-chromium:
-	@command -v chromium >/dev/null && exit 0; \
+# The browser, and coders and decoders of sound, for the tests.
+tools:
+	@missing=; for tool in $(TOOLS); do command -v $$tool >/dev/null || missing="$$missing $$tool"; done; \
+	if [ -z "$$missing" ]; then exit 0; fi; \
 	if [ "$$(id -u)" = 0 ] && command -v apt-get >/dev/null; then \
-		apt-get update -q && apt-get install -y -q --no-install-recommends chromium; \
+		apt-get update -q && apt-get install -y -q --no-install-recommends $$missing; \
 	else \
-		echo "the tests need chromium; on Debian: apt-get install chromium"; exit 1; \
+		echo "the tests need$$missing; on Debian: apt-get install$$missing"; exit 1; \
 	fi
 
 # Recorded tracks and reference libraries for the tests.

@@ -46,6 +46,22 @@ func TestPictures(t *testing.T) {
 	}
 }
 
+// TestBenchPicture takes the README's picture of the bench.
+func TestBenchPicture(t *testing.T) {
+	if os.Getenv("HILLWRIGHT_PICTURES") == "" {
+		t.Skip("writes the README's pictures: HILLWRIGHT_PICTURES=1 runs it")
+	}
+	p := open(t, device{"phone", 360, 1000, true})
+	p.light("sun")
+	p.toBench()
+	p.counts()
+	p.hears("out-1.mp3")
+	p.hears("back-1.mp3")
+	eval[bool](p, `(document.querySelector("#side-foot").remove(), document.querySelector(".run").scrollIntoView({block: "center", behavior: "instant"}),
+		document.activeElement.blur(), new Promise(done => requestAnimationFrame(() => done(true))))`)
+	p.take("bench-sun.png")
+}
+
 // take writes what the screen shows.
 func (p *tab) take(name string) {
 	p.t.Helper()
