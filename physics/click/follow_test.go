@@ -12,7 +12,7 @@ var bike = synth.Drag{MassKg: 105, InertiaKg: 1.8, Crr: 0.007, CdAM2: 0.52, Dens
 
 func scene(change func(*synth.Scene)) synth.Scene {
 	s := synth.Scene{
-		RateHz: 22050, LengthS: 45, ClicksPerTurn: 36, CircumferenceM: 2.155, Speed: bike.Coast(8.5), SNRdB: 10, Noise: synth.Tyre, Seed: 1,
+		RateHz: 22050, LengthS: 30, ClicksPerTurn: 36, CircumferenceM: 2.155, Speed: bike.Coast(8.5), SNRdB: 10, Noise: synth.Tyre, Seed: 1,
 	}
 	if change != nil {
 		change(&s)
@@ -63,31 +63,31 @@ func TestFollowsThrough(t *testing.T) {
 		from, to float64
 		s        synth.Scene
 	}{
-		{"white noise", 0, 45, scene(func(s *synth.Scene) { s.Noise = synth.White })},
-		{"tyre noise", 0, 45, scene(nil)},
-		{"wind", 0, 45, scene(func(s *synth.Scene) { s.Noise = synth.Wind })},
-		{"noise as loud as the clicks", 0, 45, scene(func(s *synth.Scene) { s.SNRdB = 0; s.Noise = synth.White })},
-		{"18 clicks", 0, 45, scene(func(s *synth.Scene) { s.ClicksPerTurn = 18 })},
-		{"24 clicks", 0, 45, scene(func(s *synth.Scene) { s.ClicksPerTurn = 24 })},
-		{"a card on 32 spokes", 0, 45, scene(func(s *synth.Scene) { s.ClicksPerTurn = 32; s.Jitter = 0.03 })},
-		{"54 clicks", 0, 45, scene(func(s *synth.Scene) { s.ClicksPerTurn = 54 })},
-		{"72 clicks", 0, 45, scene(func(s *synth.Scene) { s.ClicksPerTurn = 72 })},
-		{"120 clicks", 0, 45, scene(func(s *synth.Scene) { s.ClicksPerTurn = 120 })},
-		{"a hall", 0, 45, scene(func(s *synth.Scene) { s.ReverbS = 0.5 })},
-		{"a tenth missed, a tenth doubled", 0, 45, scene(func(s *synth.Scene) { s.Missed, s.Doubled = 0.1, 0.1 })},
-		{"the chain slaps", 0, 45, scene(func(s *synth.Scene) { s.SlapsHz = 2 })},
-		{"somebody talks", 0, 45, scene(func(s *synth.Scene) { s.Voice = 1 })},
-		{"uneven clicks", 0, 45, scene(func(s *synth.Scene) { s.Uneven = 0.6 })},
-		{"gain that pumps by 12 dB", 0, 45, scene(func(s *synth.Scene) {
+		{"white noise", 0, 30, scene(func(s *synth.Scene) { s.Noise = synth.White })},
+		{"tyre noise", 0, 30, scene(nil)},
+		{"wind", 0, 30, scene(func(s *synth.Scene) { s.Noise = synth.Wind })},
+		{"noise as loud as the clicks", 0, 30, scene(func(s *synth.Scene) { s.SNRdB = 0; s.Noise = synth.White })},
+		{"18 clicks", 0, 30, scene(func(s *synth.Scene) { s.ClicksPerTurn = 18 })},
+		{"24 clicks", 0, 30, scene(func(s *synth.Scene) { s.ClicksPerTurn = 24 })},
+		{"a card on 32 spokes", 0, 30, scene(func(s *synth.Scene) { s.ClicksPerTurn = 32; s.Jitter = 0.03 })},
+		{"54 clicks", 0, 30, scene(func(s *synth.Scene) { s.ClicksPerTurn = 54 })},
+		{"72 clicks", 0, 30, scene(func(s *synth.Scene) { s.ClicksPerTurn = 72 })},
+		{"120 clicks", 0, 30, scene(func(s *synth.Scene) { s.ClicksPerTurn = 120 })},
+		{"a hall", 0, 30, scene(func(s *synth.Scene) { s.ReverbS = 0.5 })},
+		{"a tenth missed, a tenth doubled", 0, 30, scene(func(s *synth.Scene) { s.Missed, s.Doubled = 0.1, 0.1 })},
+		{"the chain slaps", 0, 30, scene(func(s *synth.Scene) { s.SlapsHz = 2 })},
+		{"somebody talks", 0, 30, scene(func(s *synth.Scene) { s.Voice = 1 })},
+		{"uneven clicks", 0, 30, scene(func(s *synth.Scene) { s.Uneven = 0.6 })},
+		{"gain that pumps by 12 dB", 0, 30, scene(func(s *synth.Scene) {
 			s.Gain = func(t float64) float64 { return math.Pow(10, 0.3*math.Sin(2*math.Pi*t/3)) }
 		})},
-		{"gain that steps", 0, 45, scene(func(s *synth.Scene) {
+		{"gain that steps", 0, 30, scene(func(s *synth.Scene) {
 			s.Gain = func(t float64) float64 { return []float64{1, 0.25}[int(t/7)%2] }
 		})},
-		{"8 kHz", 0, 45, scene(func(s *synth.Scene) { s.RateHz = 8000 })},
-		{"16 kHz", 0, 45, scene(func(s *synth.Scene) { s.RateHz = 16000 })},
-		{"44.1 kHz", 0, 45, scene(func(s *synth.Scene) { s.RateHz = 44100 })},
-		{"48 kHz", 0, 45, scene(func(s *synth.Scene) { s.RateHz = 48000 })},
+		{"8 kHz", 0, 30, scene(func(s *synth.Scene) { s.RateHz = 8000 })},
+		{"16 kHz", 0, 30, scene(func(s *synth.Scene) { s.RateHz = 16000 })},
+		{"44.1 kHz", 0, 30, scene(func(s *synth.Scene) { s.RateHz = 44100 })},
+		{"48 kHz", 0, 30, scene(func(s *synth.Scene) { s.RateHz = 48000 })},
 		{"down to 0.6 m/s", 0, stopS, scene(func(s *synth.Scene) { s.LengthS = stopS + 5 })},
 		{"pedalling first, a brake last", 10, 50, scene(func(s *synth.Scene) {
 			s.LengthS = 58
@@ -126,7 +126,7 @@ func TestFollowsThrough(t *testing.T) {
 // more than it says, and together they are not surer than they may be.
 func TestErrorsAreHonest(t *testing.T) {
 	var n, square, far float64
-	for seed := range uint64(12) {
+	for seed := range 2 * seeds() {
 		s := scene(func(s *synth.Scene) {
 			s.Seed, s.LengthS, s.Jitter, s.Noise = seed, 25, 0.04, synth.White
 			s.SNRdB = []float64{-6, -3, 0, 10}[seed%4]
@@ -146,7 +146,7 @@ func TestErrorsAreHonest(t *testing.T) {
 	}
 	scatter := math.Sqrt(square / n)
 	t.Logf("%.0f points, pulls scatter by %.2f, %.1f %% beyond 3", n, scatter, 100*far/n)
-	if scatter > 1.15 || scatter < 0.5 || far > 0.01*n {
+	if scatter > 1.15 || scatter < 0.5 || far > 0.015*n {
 		t.Errorf("pulls scatter by %.2f (want about 1), %.1f %% lie beyond 3", scatter, 100*far/n)
 	}
 }

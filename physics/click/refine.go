@@ -48,7 +48,7 @@ func (f *fitter) fit(fromS, toS, guessHz, slope float64) (local, bool) {
 	df, dc := 0.0, 0.0
 	for _, h := range []int{1, 2, 4, most} {
 		h = min(h, f.used)
-		df, dc = f.climb(h, df, dc, 0.6/(float64(h)*long), 2.4/(float64(h)*long*long))
+		df, dc = f.climb(h, df, dc, 0.6/(float64(h)*long), 2.4/(float64(h)*long*long), 5)
 	}
 	got := local{atS: mid / f.hz, rateHz: guessHz + df, slope: slope + dc}
 	f.sums(from, to, mid, got.rateHz, got.slope, 0.5)
@@ -61,7 +61,7 @@ func (f *fitter) fit(fromS, toS, guessHz, slope float64) (local, bool) {
 	}
 	got.noise += 1e-9
 	f.weigh(&between)
-	df, dc = f.climb(f.used, 0, 0, 0.1/(float64(f.used)*long), 0.4/(float64(f.used)*long*long))
+	df, dc = f.climb(f.used, 0, 0, 0.1/(float64(f.used)*long), 0.4/(float64(f.used)*long*long), 8)
 	got.rateHz, got.slope = got.rateHz+df, got.slope+dc
 	got.error = f.spread(df, dc, long)
 	return got, got.error > 0
@@ -113,7 +113,7 @@ func (f *fitter) spread(df, dc, long float64) float64 {
 	// The rate's row of the inverse curvature, on both sides of the scatter.
 	// Fitted numbers take from the scatter; how many count is from trials.
 	p, q := cc/det, -fc/det
-	return math.Sqrt((p*p*vff + 2*p*q*vfc + q*q*vcc) * segments / (segments - 7))
+	return math.Sqrt((p*p*vff + 2*p*q*vfc + q*q*vcc) * segments / (segments - 9))
 }
 
 // weigh gives each harmonic the weight of its noise, which is taken from what
@@ -221,10 +221,10 @@ func (f *fitter) powersTo(h int, df, dc float64) (out [most + 1]float64) {
 }
 
 // climb goes to the top of the power from a place, by looking around it in
-// ever smaller steps.
-func (f *fitter) climb(h int, df, dc, stepF, stepC float64) (float64, float64) {
+// ever smaller steps, so many times.
+func (f *fitter) climb(h int, df, dc, stepF, stepC float64, times int) (float64, float64) {
 	best := f.power(h, df, dc)
-	for range 8 {
+	for range times {
 		bf, bc := df, dc
 		for _, d := range [...][2]float64{{1, 0}, {-1, 0}, {0, 1}, {0, -1}, {1, 1}, {-1, -1}} {
 			f2, c2 := df+d[0]*stepF, dc+d[1]*stepC

@@ -73,9 +73,13 @@ func TestWAVCodings(t *testing.T) {
 			v := int32(x * 8388607.5)
 			return append(o, byte(v), byte(v>>8), byte(v>>16))
 		}, 1e-6},
-		{"32 bits", 1, 32, func(o []byte, x float64) []byte { return binary.LittleEndian.AppendUint32(o, uint32(int32(x*2147483647))) }, 1e-7},
+		{"32 bits", 1, 32, func(o []byte, x float64) []byte {
+			return binary.LittleEndian.AppendUint32(o, uint32(int32(x*2147483647)))
+		}, 1e-7},
 		{"extensible", tagExtensible, 16, func(o []byte, x float64) []byte { return binary.LittleEndian.AppendUint16(o, uint16(int16(x*32767.5))) }, 1e-4},
-		{"float", 3, 32, func(o []byte, x float64) []byte { return binary.LittleEndian.AppendUint32(o, math.Float32bits(float32(x))) }, 1e-7},
+		{"float", 3, 32, func(o []byte, x float64) []byte {
+			return binary.LittleEndian.AppendUint32(o, math.Float32bits(float32(x)))
+		}, 1e-7},
 		{"double", 3, 64, func(o []byte, x float64) []byte { return binary.LittleEndian.AppendUint64(o, math.Float64bits(x)) }, 1e-7},
 	} {
 		for channels := 1; channels <= 3; channels += 2 {

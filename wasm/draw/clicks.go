@@ -166,7 +166,7 @@ func (p *clicksPlot) handle(x float64, which int, act, arg, name string) *dom.No
 
 // densities are the levels from which a cell is drawn in one of three inks: a
 // level is sixteen times how far a rate stands out, in standard deviations.
-var densities = [...]uint8{56, 96, 136}
+var densities = [...]uint8{64, 110, 185}
 
 // ink draws the spectrogram: one path for each density, of cells that were
 // joined along time.
@@ -292,7 +292,10 @@ func (p *clicksPlot) frame() dom.Parts {
 		if s+p.tidyS > p.lastS {
 			text += " s"
 		}
-		labels = append(labels, label{lines: []string{text}, x: x, y: p.plot.y1 + 17, px: smallPx, anchor: fromMiddle}.clamp(2, p.Size.W-2).node())
+		l := label{lines: []string{text}, x: x, y: p.plot.y1 + 17, px: smallPx, anchor: fromMiddle}.clamp(2, p.Size.W-2)
+		if l.box().x0 > p.plot.x0-4 { // else it lies under the speeds
+			labels = append(labels, l.node())
+		}
 	}
 	return dom.Parts{lines.node("ordinate"), labels}
 }

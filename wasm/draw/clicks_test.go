@@ -68,7 +68,7 @@ func TestInkLiesWhereClicksStandOut(t *testing.T) {
 	v := &ClickView{PerHz: 0.1, Size: Size{360, 260}, ID: "a", Line: []Spot{{0, 8, 0}, {40, 2, 0}}, ToS: 40}
 	v.Picture = &click.Picture{StepS: 1, RatesHz: []float64{20, 24, 28.8, 34.56, 41.5, 49.8, 59.7, 71.7}, Levels: make([]uint8, 8*40)}
 	v.Picture.Levels[20*8+3] = 200
-	v.Picture.Levels[30*8+5] = 60
+	v.Picture.Levels[30*8+5] = 70
 	n := Clicks(v, "title", "desc", "cut", [2]string{"a", "b"}, [2]string{"a", "b"})
 	p := newClicksPlot(v)
 	strong := pathOf(t, classed(n, "ink-3")[0])

@@ -3,9 +3,11 @@
 package trial
 
 import (
+	"bytes"
 	"fmt"
 	"math"
 	"os"
+	"os/exec"
 	"path/filepath"
 	"slices"
 	"strings"
@@ -13,6 +15,8 @@ import (
 
 	"github.com/chromedp/cdproto/emulation"
 	"github.com/chromedp/cdproto/page"
+
+	"hillwright/physics/synth"
 )
 
 // The benchmarks measure the page in the browser, on this machine and with its
@@ -193,4 +197,46 @@ func longTrack(points int) []byte {
 	}
 	b.WriteString(`</trkseg></trk></gpx>`)
 	return []byte(b.String())
+}
+
+// BenchmarkListen follows the clicks of MP3 recordings of 44.1 kHz, from the
+// file being picked to the run being shown: how many times faster than it was
+// ridden. What an hour needs of memory is a benchmark of physics/click.
+func BenchmarkListen(b *testing.B) {
+	browserPath(b)
+	s := synth.Scene{
+		RateHz: 44100, LengthS: 50, ClicksPerTurn: 36, CircumferenceM: 2.155, SNRdB: 10, Seed: 1,
+		Speed: synth.Drag{MassKg: 105, InertiaKg: 1.8, Crr: 0.007, CdAM2: 0.52, DensityKgM3: 1.19}.Coast(8.5),
+	}
+	coder := exec.Command("lame", "--quiet", "-m", "m", "--cbr", "-b", "128", "-", "-")
+	coder.Stdin = bytes.NewReader(synth.WAV(s.Make(), s.RateHz, 16))
+	one, err := coder.Output()
+	if err != nil {
+		b.Fatalf("lame: %v; on Debian: apt-get install lame", err)
+	}
+	for _, row := range []struct {
+		name  string
+		times int
+	}{{"50s", 1}, {"1h", 72}} {
+		b.Run(row.name, func(b *testing.B) {
+			file := filepath.Join(b.TempDir(), "long.mp3")
+			if err := os.WriteFile(file, bytes.Repeat(one, row.times), 0o600); err != nil {
+				b.Fatal(err)
+			}
+			p := newTab(b, phone, newHost(b, atRoot, false))
+			p.visit()
+			p.toBench()
+			var faster []float64
+			for b.Loop() {
+				runs := eval[int](p, `document.querySelectorAll(".run").length`)
+				p.pick(`#bench-sound `+act("sound-from", "run"), file)
+				eval[bool](p, `(window.heardFrom = performance.now(), window.heardTo = 0, (function look() {
+					document.querySelectorAll(".run").length > $1 ? window.heardTo = performance.now() : requestAnimationFrame(look) })(), true)`, runs)
+				for !eval[bool](p, `new Promise(done => { const from = performance.now(), look = () => window.heardTo > 0 || performance.now() - from > 5000 ? done(window.heardTo > 0) : requestAnimationFrame(look); look() })`) {
+				}
+				faster = append(faster, s.LengthS*float64(row.times)/(eval[float64](p, `heardTo - heardFrom`)/1000))
+			}
+			b.ReportMetric(middle(faster), "x_realtime")
+		})
+	}
 }
