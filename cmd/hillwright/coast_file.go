@@ -58,7 +58,7 @@ func listen(file io.Reader) (*click.Heard, bool, error) {
 	for {
 		n, err := r.Read(part)
 		l.Write(part[:n])
-		if err == io.EOF {
+		if err == io.EOF || l.Full() {
 			break
 		}
 		if err != nil {

@@ -162,8 +162,11 @@ func TestMemoryIsBounded(t *testing.T) {
 	l.count = longestS * 8000
 	l.onset = append(l.onset, make([]uint8, int(longestS*l.envelopeHz()))...)
 	l.rates.next = 1 << 30
+	if l.Full() {
+		t.Error("full before its time")
+	}
 	l.Write(second)
-	if _, err := l.Finish(); kindOf(err) != TooLong {
+	if _, err := l.Finish(); kindOf(err) != TooLong || !l.Full() {
 		t.Errorf("two hours: %v", err)
 	}
 }

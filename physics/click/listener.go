@@ -85,6 +85,10 @@ func (l *Listener) Write(mono []float32) {
 	}
 }
 
+// Full tells that more came than is kept, so that no more need be written:
+// Finish will say so.
+func (l *Listener) Full() bool { return l.long }
+
 // Finish follows the clicks in all that was heard. The error is an *Error.
 func (l *Listener) Finish() (*Heard, error) {
 	switch s := l.Seconds(); {

@@ -106,7 +106,7 @@ func listenTo(file js.Value, progress func(float64) bool) (h Heard) {
 	for {
 		n, err := r.Read(part)
 		l.Write(part[:n])
-		if err == io.EOF {
+		if err == io.EOF || l.Full() {
 			break
 		}
 		if err != nil {

@@ -26,8 +26,9 @@ type recording struct {
 // Record begins to record the microphone, its samples as they are. level is
 // told the loudest sample lately (full scale 1), the length [s] and whether the
 // browser changes the level by itself; ready that the recording is at hand,
-// under a name; failed why there is none: absent, refused, or lost when the
-// microphone was taken away (what was recorded is then at hand as well).
+// under a name; failed why there is none: absent, refused, or why it ended by
+// itself: lost when the microphone was taken away, full when it lasted as long
+// as it may (what was recorded is then at hand as well).
 func (d *Device) Record(level func(peak, seconds float64, gain bool), ready func(name string), failed func(string)) {
 	if d.recording != nil {
 		return
@@ -67,9 +68,9 @@ func (d *Device) Record(level func(peak, seconds float64, gain bool), ready func
 		address := window().Get("hillwrightRecorder").String()
 		then(r.audio.Get("audioWorklet").Call("addModule", address), func(js.Value) {
 			if d.recording == r {
-				r.begin(func() {
+				r.begin(func(how string) {
 					if d.recording == r {
-						failed("lost")
+						failed(how)
 						d.StopRecording()
 					}
 				})
@@ -84,19 +85,19 @@ func (d *Device) Record(level func(peak, seconds float64, gain bool), ready func
 	})
 }
 
-// begin lets the samples in.
-func (r *recording) begin(lost func()) {
+// begin lets the samples in; ends is told when no more come.
+func (r *recording) begin(ends func(how string)) {
 	r.rateHz = r.audio.Get("sampleRate").Int()
 	track := r.stream.Call("getAudioTracks").Index(0)
 	r.gain = track.Call("getSettings").Get("autoGainControl").Truthy()
 	r.node = window().Get("AudioWorkletNode").New(r.audio, "hillwright-recorder", map[string]any{"numberOfOutputs": 0})
 	r.message = js.FuncOf(func(_ js.Value, args []js.Value) any {
-		r.take(args[0].Get("data"), lost)
+		r.take(args[0].Get("data"), ends)
 		return nil
 	})
 	r.node.Get("port").Set("onmessage", r.message)
 	r.ended = js.FuncOf(func(js.Value, []js.Value) any {
-		lost()
+		ends("lost")
 		return nil
 	})
 	track.Set("onended", r.ended)
@@ -104,7 +105,7 @@ func (r *recording) begin(lost func()) {
 	r.audio.Call("resume")
 }
 
-func (r *recording) take(part js.Value, tooLong func()) {
+func (r *recording) take(part js.Value, ends func(how string)) {
 	samples := part.Get("samples")
 	r.chunks.Call("push", samples)
 	r.samples += samples.Length()
@@ -116,7 +117,7 @@ func (r *recording) take(part js.Value, tooLong func()) {
 	}
 	r.level(part.Get("peak").Float(), seconds, r.gain)
 	if seconds > longestRecordingS {
-		tooLong()
+		ends("full")
 	}
 }
 

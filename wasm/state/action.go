@@ -154,7 +154,7 @@ const (
 
 	SoundLevel   = "sound-level"   // X: the loudest sample lately, full scale 1; Y: how long it records [s]; Text: "gain" where the device changes the level by itself
 	SoundReady   = "sound-ready"   // Arg: the name of the recording at hand, Text: "recorded" or "file"
-	SoundFailed  = "sound-failed"  // Arg: absent, refused or lost
+	SoundFailed  = "sound-failed"  // Arg: absent, refused, lost or full
 	ListenPart   = "listen-part"   // X: the part that is heard
 	Listened     = "listened"      // Heard; X: where the file is cut off [s], 0 when it is whole
 	ListenFailed = "listen-failed" // Err

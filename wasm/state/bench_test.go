@@ -204,6 +204,12 @@ func TestMicrophoneFails(t *testing.T) {
 			t.Errorf("%s: %+v", how, s.Bench.Sound)
 		}
 	}
+	// Stopped before the browser gave it, it is over.
+	s0 := atBench(t)
+	s0, _ = Reduce(s0, Action{Name: SoundFor, Arg: ForRun})
+	if s0, _ = Reduce(s0, Action{Name: SoundDone}); s0.Bench.Sound.Stage != SoundNone {
+		t.Errorf("a recording that never began is %q", s0.Bench.Sound.Stage)
+	}
 	// Leaving the bench ends a recording; it is listened to all the same.
 	s := atBench(t)
 	s, _ = Reduce(s, Action{Name: SoundFor, Arg: ForRun})

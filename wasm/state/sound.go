@@ -37,7 +37,7 @@ type Sound struct {
 	Gain     bool    // the device changes the level by itself
 	Part     float64 // of it that is heard
 	CutS     float64 // where a damaged file ends [s], 0 for a whole one
-	Fails    string  // absent, refused or lost
+	Fails    string  // absent, refused, lost, or full when it lasted as long as it may
 	Said     words.Key
 	SaidArgs []string
 }
@@ -65,6 +65,9 @@ func (s *State) doSound(a Action) (bool, []Effect) {
 		return true, []Effect{{Kind: PickSound}}
 	case SoundDone:
 		if r.Stage == SoundRecording {
+			if r.Seconds == 0 { // nothing was heard yet: nothing will come
+				r.Stage = SoundNone
+			}
 			return true, []Effect{{Kind: StopSound}, {Kind: Sleep}}
 		}
 	case SoundLevel:
@@ -76,7 +79,7 @@ func (s *State) doSound(a Action) (bool, []Effect) {
 		return true, s.listen()
 	case SoundFailed:
 		r.Fails = a.Arg
-		if a.Arg != "lost" {
+		if a.Arg != "lost" && a.Arg != "full" { // else what was recorded follows
 			r.Stage = SoundNone
 		}
 		return true, []Effect{{Kind: Sleep}}

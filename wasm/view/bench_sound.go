@@ -67,7 +67,7 @@ func (v *viewer) soundWays() Parts {
 	if !stand {
 		list = append(list, way(state.LapsBegin, state.LapMarks, "marks", words.SoundMarks), way(state.LapsBegin, state.LapDisplay, "display", words.SoundDisplay))
 	}
-	fails := map[string]words.Key{"refused": words.SoundRefused, "absent": words.SoundAbsent, "lost": words.SoundLost}
+	fails := map[string]words.Key{"refused": words.SoundRefused, "absent": words.SoundAbsent, "lost": words.SoundLost, "full": words.SoundFull}
 	var unknown Part
 	if !v.Question.ClicksKnown() {
 		unknown = El("div", Class("bench-count"),

@@ -60,6 +60,7 @@ func TestBenchStates(t *testing.T) {
 		{"loud", []state.Action{{Name: state.SoundFor, Arg: state.ForRun}, {Name: state.SoundLevel, X: 0.99, Y: 3}}, []words.Key{words.SoundLoud}},
 		{"refused", []state.Action{{Name: state.SoundFor, Arg: state.ForRun}, {Name: state.SoundFailed, Arg: "refused"}}, []words.Key{words.SoundRefused, words.SoundOpen}},
 		{"absent", []state.Action{{Name: state.SoundFor, Arg: state.ForRun}, {Name: state.SoundFailed, Arg: "absent"}}, []words.Key{words.SoundAbsent}},
+		{"lost", []state.Action{{Name: state.SoundFor, Arg: state.ForRun}, {Name: state.SoundFailed, Arg: "full"}, {Name: state.SoundReady, Arg: "a.wav"}, {Name: state.ListenFailed, Err: &click.Error{}}}, []words.Key{words.SoundFull}},
 		{"listening", []state.Action{{Name: state.SoundFrom, Arg: state.ForRun}, {Name: state.SoundReady, Arg: "a.mp3"}, {Name: state.ListenPart, X: 0.4}}, []words.Key{words.SoundListenStop}},
 		{"speech", failed(&click.Error{Kind: click.Silent}), []words.Key{words.ClickSilent, words.SoundAgain}},
 		{"a picture", failed(&sound.Error{Kind: sound.NotSound, Looks: sound.LookPicture}), []words.Key{words.LookAPicture}},

@@ -34,6 +34,7 @@ var englishBench = [keys]string{
 	SoundRefused:       "The microphone was not allowed. Allow it in the browser's settings for this page, or open a recording.",
 	SoundAbsent:        "This browser gives no microphone here. Record with any voice recorder as MP3 or WAV and open the file.",
 	SoundLost:          "The microphone was taken away; what was recorded until then is used.",
+	SoundFull:          "The recording ended by itself after 20 minutes; what was recorded is used.",
 	SoundListening:     "Listening to {0} …",
 	SoundListenStop:    "stop listening",
 	SoundSave:          "save the recording (WAV)",

@@ -34,6 +34,7 @@ var germanBench = [keys]string{
 	SoundRefused:       "Das Mikrofon wurde nicht erlaubt. In den Einstellungen des Browsers für diese Seite erlauben oder eine Aufnahme öffnen.",
 	SoundAbsent:        "Dieser Browser gibt hier kein Mikrofon her. Mit einem Aufnahmegerät als MP3 oder WAV aufnehmen und die Datei öffnen.",
 	SoundLost:          "Das Mikrofon wurde weggenommen; das bis dahin Aufgenommene wird verwendet.",
+	SoundFull:          "Die Aufnahme endete nach 20 Minuten von selbst; das Aufgenommene wird verwendet.",
 	SoundListening:     "{0} wird angehört …",
 	SoundListenStop:    "Anhören abbrechen",
 	SoundSave:          "Aufnahme sichern (WAV)",

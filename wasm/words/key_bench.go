@@ -48,6 +48,7 @@ const (
 	SoundRefused
 	SoundAbsent
 	SoundLost
+	SoundFull
 
 	// SoundListening: {0} name.
 	SoundListening
