@@ -39,8 +39,9 @@ func (v *viewer) benchJob() *Node {
 	one := func(is string, k words.Key) *Node {
 		return v.one(state.BenchJob, is, Text(capital(v.Voice.Say(k))), job == is)
 	}
+	first := true
 	intro, says := words.BenchCoastIntro, Parts{
-		v.fill(words.AskBenchBike, v.thing(keep.Bike, nil), v.input("coast.mass_kg"), v.input("coast.clicks_per_turn"), v.input("coast.circumference_m")),
+		v.fill(words.AskBenchBike, v.thing(keep.Bike, &first), v.input("coast.mass_kg"), v.input("coast.clicks_per_turn"), v.input("coast.circumference_m")),
 		Text(" "),
 		v.fill(words.AskBenchRoad, v.input("coast.grade"), v.input("coast.grade_error"), v.input("coast.wind_mps")),
 	}
