@@ -1,6 +1,7 @@
 package state
 
 import (
+	"errors"
 	"math"
 	"strconv"
 
@@ -129,9 +130,11 @@ func (s *State) counting() (runs []coast.Run, ids []string) {
 func (s *State) weighRuns() {
 	b := &s.Bench
 	b.stale, b.Result, b.Then, b.ThenRig = false, nil, nil, nil
-	runs, _ := s.counting()
+	runs, ids := s.counting()
 	setup := s.Question.CoastSetup(s.roadHeight())
-	if b.Result, b.Refused = coast.Fit(runs, setup); b.Refused == nil {
+	if b.Result, b.Refused = coast.Fit(runs, setup); b.Refused != nil {
+		b.Refused = s.numbered(b.Refused, ids)
+	} else {
 		b.CrrOf, b.CdAOf = s.Question.BikeDrag(b.Result)
 		q := s.Question
 		q.Source = copied(q.Source)
@@ -140,6 +143,22 @@ func (s *State) weighRuns() {
 		}
 	}
 	s.judgeSpin()
+}
+
+// numbered lets an error name a run by its number on the page, where runs that
+// do not count have numbers too.
+func (s *State) numbered(err error, ids []string) error {
+	var e *coast.Error
+	if !errors.As(err, &e) || e.Run >= len(ids) {
+		return err
+	}
+	named := *e
+	for i, r := range s.Runs() {
+		if r.ID == ids[e.Run] {
+			named.Run = i
+		}
+	}
+	return &named
 }
 
 // roadHeight is the height of the hill's foot, near which the road is taken to

@@ -114,6 +114,18 @@ func TestRunsAreThePersons(t *testing.T) {
 	for i := range 2 {
 		s = record(t, s, coasting(i%2 == 1), 1790000000+int64(i))
 	}
+	// Two short ones; the first is left out, the second is blamed by its number.
+	odd := s
+	for i := range 2 {
+		h := coasting(false)
+		h.Stretches[0].Points = h.Stretches[0].Points[:6]
+		odd = record(t, odd, h, 1790000010+int64(i))
+	}
+	odd, _ = Reduce(odd, Action{Name: RunUse, Arg: odd.Runs()[2].ID + "=no"})
+	var e0 *coast.Error
+	if !errors.As(odd.Bench.Refused, &e0) || e0.Kind != coast.TooShort || e0.Run != 3 {
+		t.Errorf("blamed: %v", odd.Bench.Refused)
+	}
 	id := s.Runs()[1].ID
 	grade := s.Bench.Result.Grade.Value
 	s, e := Reduce(s, Action{Name: RunWay, Arg: id + "=out", Now: 5})
