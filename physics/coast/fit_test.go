@@ -328,6 +328,11 @@ func TestBikeResistsTheSame(t *testing.T) {
 			t.Errorf("at %v m/s the bike resists with %v N, the runs with %v N", v, got, want)
 		}
 	}
+	middle := (r.Runs[0].StartMps + r.Runs[0].EndMps) / 2
+	want := s.MassKg.Value*unit.Gravity*r.Crr.Value + 0.5*s.DensityKgM3.Value*r.CdAM2.Value*middle*middle
+	if got := load.Force(middle, 0, 1, 0, 0); math.Abs(got/want-1) > 1e-5 {
+		t.Errorf("in the middle the bike resists with %v N, the runs with %v N", got, want)
+	}
 }
 
 // A wheel whose torque and wind are known.
