@@ -57,15 +57,7 @@ func runAsk(args []string, out, errs io.Writer) int {
 }
 
 func (o *askOptions) answer(out io.Writer) error {
-	voice, err := voiceOf(o.lang, o.units)
-	if err != nil {
-		return err
-	}
-	copied, err := o.shop()
-	if err != nil {
-		return err
-	}
-	q, err := o.question(&copied.Shop)
+	voice, copied, q, err := o.asked()
 	if err != nil {
 		return err
 	}

@@ -64,15 +64,7 @@ func runCoast(args []string, out, errs io.Writer) int {
 }
 
 func (o *coastOptions) answer(out io.Writer) error {
-	voice, err := voiceOf(o.lang, o.units)
-	if err != nil {
-		return err
-	}
-	copied, err := o.shop()
-	if err != nil {
-		return err
-	}
-	q, err := o.question(&copied.Shop)
+	voice, _, q, err := o.asked()
 	if err != nil {
 		return err
 	}

@@ -50,22 +50,7 @@ func listen(file io.Reader) (*click.Heard, bool, error) {
 	if err != nil {
 		return nil, false, err
 	}
-	l, err := click.NewListener(r.RateHz())
-	if err != nil {
-		return nil, false, err
-	}
-	part := make([]float32, 1<<14)
-	for {
-		n, err := r.Read(part)
-		l.Write(part[:n])
-		if err == io.EOF || l.Full() {
-			break
-		}
-		if err != nil {
-			return nil, false, err
-		}
-	}
-	h, err := l.Finish()
+	h, err := click.Hear(r, nil)
 	_, cut := r.Cut()
 	return h, cut, err
 }

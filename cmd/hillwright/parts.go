@@ -36,6 +36,18 @@ func (o *parts) flags(f *flag.FlagSet) {
 	})
 }
 
+// asked reads the voice, the shop and the question that the flags mean.
+func (o *parts) asked() (v words.Voice, s shop.Copy, q ask.Question, err error) {
+	if v, err = voiceOf(o.lang, o.units); err != nil {
+		return v, s, q, err
+	}
+	if s, err = o.shop(); err != nil {
+		return v, s, q, err
+	}
+	q, err = o.question(&s.Shop)
+	return v, s, q, err
+}
+
 // shop reads the shop that is meant.
 func (o *parts) shop() (shop.Copy, error) {
 	if o.shopDir != "" {

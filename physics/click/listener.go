@@ -1,7 +1,7 @@
 // Package click follows the clicks of a freehub, or of a card on the spokes,
 // in a recording: samples in, clicks per second over time out, with errors. It
 // takes the sound a part at a time and keeps about 7 kB of each second. Start
-// with NewListener.
+// with Hear, or with NewListener where the samples come by themselves.
 //
 // The onset envelope is the loudness in a few bands, each beside its own recent
 // mean (after Bello et al., A tutorial on onset detection in music signals,
@@ -15,7 +15,11 @@
 // envelope's phase.
 package click
 
-import "math"
+import (
+	"errors"
+	"io"
+	"math"
+)
 
 // What a listener takes.
 const (
@@ -88,6 +92,42 @@ func (l *Listener) Write(mono []float32) {
 // Full tells that more came than is kept, so that no more need be written:
 // Finish will say so.
 func (l *Listener) Full() bool { return l.long }
+
+// Source is a recording of one channel that is read a part at a time, until
+// io.EOF (physics/sound).
+type Source interface {
+	RateHz() int
+	Read(dst []float32) (int, error)
+}
+
+// ErrStopped is the error of a recording that was not heard to its end because the
+// listener was told so.
+var ErrStopped = errors.New("the listening was stopped")
+
+// Hear follows the clicks in a whole recording. on is asked between parts
+// whether to go on; nil always does. The error is an *Error, ErrStopped, or the
+// source's own.
+func Hear(from Source, on func() bool) (*Heard, error) {
+	l, err := NewListener(from.RateHz())
+	if err != nil {
+		return nil, err
+	}
+	part := make([]float32, 1<<12)
+	for !l.Full() {
+		n, err := from.Read(part)
+		l.Write(part[:n])
+		if err == io.EOF {
+			break
+		}
+		if err != nil {
+			return nil, err
+		}
+		if on != nil && !on() {
+			return nil, ErrStopped
+		}
+	}
+	return l.Finish()
+}
 
 // Finish follows the clicks in all that was heard. The error is an *Error.
 func (l *Listener) Finish() (*Heard, error) {

@@ -2,7 +2,6 @@ package coast_test
 
 import (
 	"bytes"
-	"io"
 	"math"
 	"math/rand/v2"
 	"os"
@@ -28,20 +27,7 @@ func heard(t *testing.T, file []byte) *click.Heard {
 	if err != nil {
 		t.Fatal(err)
 	}
-	l, err := click.NewListener(r.RateHz())
-	if err != nil {
-		t.Fatal(err)
-	}
-	part := make([]float32, 4096)
-	for err == nil {
-		var n int
-		n, err = r.Read(part)
-		l.Write(part[:n])
-	}
-	if err != io.EOF {
-		t.Fatal(err)
-	}
-	h, err := l.Finish()
+	h, err := click.Hear(r, nil)
 	if err != nil {
 		t.Fatal(err)
 	}

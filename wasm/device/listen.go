@@ -37,21 +37,8 @@ func (d *Device) StopListening() { d.stopWork() }
 
 // listenHere listens in the page itself, giving way to it between slices.
 func (d *Device) listenHere(file js.Value, part func(float64), done func(Heard)) {
-	mine := d.stopped
-	go func() {
-		began := nowMs()
-		h := listenTo(file, func(read float64) bool {
-			if nowMs()-began > sliceFor {
-				part(read)
-				giveWay()
-				began = nowMs()
-			}
-			return mine == d.stopped
-		})
-		if mine == d.stopped {
-			done(h)
-		}
-	}()
+	var h Heard
+	d.inSlices(func(progress func(float64) bool) { h = listenTo(file, progress) }, part, func() { done(h) })
 }
 
 // sliceBytes is how much of a file is read at a time.
@@ -98,28 +85,12 @@ func listenTo(file js.Value, progress func(float64) bool) (h Heard) {
 	if err != nil {
 		return Heard{Err: err}
 	}
-	l, err := click.NewListener(r.RateHz())
-	if err != nil {
-		return Heard{Err: err}
-	}
-	part := make([]float32, 1<<12)
-	for {
-		n, err := r.Read(part)
-		l.Write(part[:n])
-		if err == io.EOF || l.Full() {
-			break
-		}
-		if err != nil {
-			return Heard{Err: err}
-		}
-		if !progress(float64(b.at-len(b.have)) / float64(max(1, b.size))) {
-			return Heard{Err: errFailed}
-		}
-	}
+	h.Clicks, h.Err = click.Hear(r, func() bool {
+		return progress(float64(b.at-len(b.have)) / float64(max(1, b.size)))
+	})
 	if at, cut := r.Cut(); cut {
 		h.CutS = at
 	}
-	h.Clicks, h.Err = l.Finish()
 	return h
 }
 

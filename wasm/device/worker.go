@@ -101,12 +101,20 @@ func (w *worker) take(message js.Value) {
 // sliceFor is how long a slice of a reading in the page itself may take [ms].
 const sliceFor = 12
 
-// readHere reads a track in the page itself, giving way to it between slices.
+// readHere reads a track in the page itself.
 func (d *Device) readHere(data []byte, part func(float64), done func(Track)) {
+	var t Track
+	d.inSlices(func(progress func(float64) bool) { t = readTrack(data, progress) }, part, func() { done(t) })
+}
+
+// inSlices does long work in the page itself, giving way to it between slices.
+// The work tells its progress, and ends early where that gives false: when
+// other work was begun or this one stopped. done is called only at its own end.
+func (d *Device) inSlices(work func(progress func(float64) bool), part func(float64), done func()) {
 	mine := d.stopped
 	go func() {
 		began := nowMs()
-		t := readTrack(data, func(read float64) bool {
+		work(func(read float64) bool {
 			if nowMs()-began > sliceFor {
 				part(read)
 				giveWay()
@@ -115,7 +123,7 @@ func (d *Device) readHere(data []byte, part func(float64), done func(Track)) {
 			return mine == d.stopped
 		})
 		if mine == d.stopped {
-			done(t)
+			done()
 		}
 	}()
 }

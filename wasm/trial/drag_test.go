@@ -237,23 +237,7 @@ func TestBenchFits(t *testing.T) {
 		t.Run(d.name, func(t *testing.T) {
 			p := open(t, d)
 			p.toBench()
-			axe, err := os.ReadFile(axeFile)
-			if err != nil {
-				t.Fatalf("%v: run `cd testdata && npm ci --ignore-scripts`", err)
-			}
-			eval[bool](p, string(axe)+"; true")
-			look := func(state string) {
-				p.until("nothing moves", `document.getAnimations().length === 0`)
-				for _, fault := range eval[[]string](p, lookForFaults) {
-					t.Errorf("%s: %s", state, fault)
-				}
-				for _, small := range eval[[]string](p, lookForSmall, thumb) {
-					t.Errorf("%s: %s", state, small)
-				}
-				for _, v := range p.violations() {
-					t.Errorf("%s: %s", state, v)
-				}
-			}
+			look := p.looker(thumb)
 			look("nothing yet")
 			p.counts()
 			p.hears("out-1.mp3")

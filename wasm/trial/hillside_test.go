@@ -220,23 +220,7 @@ func TestHillsideFits(t *testing.T) {
 	for _, d := range []device{phone, landscape, tablet, {"narrow", 320, 640, true}} {
 		t.Run(d.name, func(t *testing.T) {
 			p := atFoot(t, d)
-			axe, err := os.ReadFile(axeFile)
-			if err != nil {
-				t.Fatalf("%v: run `cd testdata && npm ci --ignore-scripts`", err)
-			}
-			eval[bool](p, string(axe)+"; true")
-			look := func(state string) {
-				p.until("nothing moves", `document.getAnimations().length === 0`)
-				for _, fault := range eval[[]string](p, lookForFaults) {
-					t.Errorf("%s: %s", state, fault)
-				}
-				for _, small := range eval[[]string](p, lookForSmall, glove) {
-					t.Errorf("%s: %s", state, small)
-				}
-				for _, v := range p.violations() {
-					t.Errorf("%s: %s", state, v)
-				}
-			}
+			look := p.looker(glove)
 			look("nothing measured")
 			p.tape()
 			p.speak(German) // the longer words
@@ -267,6 +251,30 @@ func TestHillsideFits(t *testing.T) {
 				p.tap(act("measure", ""))
 			}
 		})
+	}
+}
+
+// looker looks at a state of the page for what cannot be read, what a hand of
+// some size [CSS px] would miss, and for what axe-core finds.
+func (p *tab) looker(hand float64) func(state string) {
+	p.t.Helper()
+	axe, err := os.ReadFile(axeFile)
+	if err != nil {
+		p.fatal(fmt.Errorf("%w: run `cd testdata && npm ci --ignore-scripts`", err))
+	}
+	eval[bool](p, string(axe)+"; true")
+	return func(state string) {
+		p.t.Helper()
+		p.until("nothing moves", `document.getAnimations().length === 0`)
+		for _, fault := range eval[[]string](p, lookForFaults) {
+			p.t.Errorf("%s: %s", state, fault)
+		}
+		for _, small := range eval[[]string](p, lookForSmall, hand) {
+			p.t.Errorf("%s: %s", state, small)
+		}
+		for _, v := range p.violations() {
+			p.t.Errorf("%s: %s", state, v)
+		}
 	}
 }
 

@@ -81,24 +81,7 @@ func TestBenchStates(t *testing.T) {
 				a.Now = 1800000000
 				s, _ = state.Reduce(s, a)
 			}
-			page := Page(s)
-			said := strings.ToLower(page.Words())
-			for _, k := range test.says {
-				if want := strings.ToLower(s.Voice.Say(k)); !strings.Contains(said, want) {
-					t.Errorf("%s, %s: does not say %q", test.name, lang, want)
-				}
-			}
-			ids := map[string]bool{}
-			page.Walk(func(n *dom.Node) {
-				if id, ok := n.Attr("id"); ok && ids[id] {
-					t.Errorf("%s: two elements of the id %s", test.name, id)
-				} else if ok {
-					ids[id] = true
-				}
-			})
-			if strings.ContainsAny(said, "{}") {
-				t.Errorf("%s, %s: a blank is left open in %s", test.name, lang, said)
-			}
+			checkState(t, test.name+", "+lang, s.Voice, Page(s), test.says)
 		}
 	}
 }

@@ -60,24 +60,31 @@ func TestHillsideStates(t *testing.T) {
 	for _, test := range tests {
 		for _, lang := range []string{"en", "de"} {
 			s, page := atFoot(t, lang, test.actions...)
-			said := strings.ToLower(page.Words())
-			for _, k := range test.says {
-				if want := strings.ToLower(s.Voice.Say(k)); !strings.Contains(said, want) {
-					t.Errorf("%s, %s: does not say %q", test.name, lang, want)
-				}
-			}
-			ids := map[string]bool{}
-			page.Walk(func(n *dom.Node) {
-				if id, ok := n.Attr("id"); ok && ids[id] {
-					t.Errorf("%s: two elements of the id %s", test.name, id)
-				} else if ok {
-					ids[id] = true
-				}
-			})
-			if strings.ContainsAny(said, "{}") {
-				t.Errorf("%s, %s: a blank is left open in %s", test.name, lang, said)
-			}
+			checkState(t, test.name+", "+lang, s.Voice, page, test.says)
 		}
+	}
+}
+
+// checkState checks a page: the words that it must have, ids once, nothing said
+// in braces.
+func checkState(t *testing.T, name string, v words.Voice, page *dom.Node, says []words.Key) {
+	t.Helper()
+	said := strings.ToLower(page.Words())
+	for _, k := range says {
+		if want := strings.ToLower(v.Say(k)); !strings.Contains(said, want) {
+			t.Errorf("%s: does not say %q", name, want)
+		}
+	}
+	ids := map[string]bool{}
+	page.Walk(func(n *dom.Node) {
+		if id, ok := n.Attr("id"); ok && ids[id] {
+			t.Errorf("%s: two elements of the id %s", name, id)
+		} else if ok {
+			ids[id] = true
+		}
+	})
+	if strings.ContainsAny(said, "{}") {
+		t.Errorf("%s: a blank is left open in %s", name, said)
 	}
 }
 
