@@ -14,6 +14,7 @@ const (
 	OddRate                     // a sampling rate beyond all use; Got is the rate [Hz]
 	NoSamples                   // it is whole and holds no sound
 	Damaged                     // it begins right and cannot be read on
+	SlowMP3                     // an MP3 of MPEG-2.5, below 16 kHz, which is not read; Got is its rate [Hz]
 )
 
 // Look is what a file looks like by its first bytes.
@@ -66,6 +67,8 @@ func (e *Error) Error() string {
 		return "the WAV file has " + strconv.Itoa(e.Got) + " bits in a sample; expected 8, 16, 24, 32 or 64 (float)"
 	case OddRate:
 		return "the sampling rate is " + strconv.Itoa(e.Got) + " Hz; expected " + strconv.Itoa(LowestHz) + " to " + strconv.Itoa(HighestHz) + " Hz"
+	case SlowMP3:
+		return "the MP3 file has a sampling rate of " + strconv.Itoa(e.Got) + " Hz; expected 16000 Hz or more: choose a better quality in the recorder's settings, or WAV"
 	case NoSamples:
 		return "there is no sound in the file; record again"
 	}

@@ -63,6 +63,14 @@ var (
 	rates2 = [16]int{0, 8, 16, 24, 32, 40, 48, 56, 64, 80, 96, 112, 128, 144, 160, 0}
 )
 
+// slowHz is the sampling rate [Hz] of a frame of MPEG-2.5, 0 for any other.
+func slowHz(b []byte) int {
+	if frameBytes(b) == 0 || b[1]>>3&3 != 0 {
+		return 0
+	}
+	return [3]int{11025, 12000, 8000}[b[2]>>2&3]
+}
+
 // frameBytes is the length of the layer III frame whose header stands at the
 // beginning, 0 where none does.
 func frameBytes(b []byte) int {

@@ -26,6 +26,9 @@ func openMP3(in *bufio.Reader) (s samples, rateHz int, err error) {
 		}
 	}()
 	skipTag(in)
+	if head, _ := in.Peek(4); slowHz(head) > 0 { // the decoder does not know these
+		return nil, 0, &Error{Kind: SlowMP3, Got: slowHz(head)}
+	}
 	d, err := mp3.NewDecoder(stream{in})
 	if err != nil {
 		return nil, 0, &Error{Kind: Damaged}

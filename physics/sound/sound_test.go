@@ -170,6 +170,7 @@ func TestErrors(t *testing.T) {
 		{"12 bits", string(wavOf(1, 1, 12, 8000, []byte("aaaa"), 4)), OddBits, 0, "12 bits"},
 		{"100 Hz", string(wavOf(1, 1, 16, 100, []byte("aaaa"), 4)), OddRate, 0, "100 Hz"},
 		{"no channel", string(wavOf(1, 0, 16, 8000, []byte("aaaa"), 4)), Damaged, 0, "damaged"},
+		{"an MP3 of 11 kHz", strings.Repeat("\xff\xe3\x40\xc0"+strings.Repeat("\x00", 204), 5), SlowMP3, 0, "11025 Hz"},
 		{"a tag and no frames", "ID3\x04\x00\x00\x00\x00\x00\x0a" + pad, Damaged, 0, "damaged"},
 	} {
 		_, _, err := all(strings.NewReader(row.file))

@@ -118,7 +118,7 @@ func TestEveryRefusalIsSaid(t *testing.T) {
 	for k := click.OddRate; k <= click.NoSingle; k++ {
 		check(&click.Error{Kind: k, Got: 1.5})
 	}
-	for k := sound.Empty; k <= sound.Damaged; k++ {
+	for k := sound.Empty; k <= sound.SlowMP3; k++ {
 		check(&sound.Error{Kind: k, Got: 7})
 	}
 	for l := sound.LookNothing; l <= sound.LookZIP; l++ {

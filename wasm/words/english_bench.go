@@ -128,6 +128,7 @@ var englishBench = [keys]string{
 	SoundWAV:           "The WAV file is coded in a way that is not read (tag {0}). Expected PCM or float: choose uncompressed in the recorder's settings.",
 	SoundBits:          "The WAV file has {0} bits in a sample. Expected 8, 16, 24, 32 or 64.",
 	SoundRate:          "The sampling rate is {0} Hz. Expected 8000 to 192000 Hz.",
+	SoundSlow:          "The MP3 file has a sampling rate of {0} Hz. Expected 16000 Hz or more: choose a better quality in the recorder's settings, or WAV.",
 	SoundNoSamples:     "There is no sound in the file. Record again.",
 	SoundDamaged:       "The file is damaged before its first sound. Record again, or copy the file anew from the recorder.",
 	ClickTooShort:      "The recording lasts {0} s. Expected at least 3 s; a coast-down lasts 20 s or more.",

@@ -128,6 +128,7 @@ var germanBench = [keys]string{
 	SoundWAV:           "Die WAV-Datei ist in einer nicht lesbaren Art kodiert (Kennung {0}). Erwartet: PCM oder Gleitkomma; am Aufnahmegerät unkomprimiert wählen.",
 	SoundBits:          "Die WAV-Datei hat {0} Bit je Abtastwert. Erwartet: 8, 16, 24, 32 oder 64.",
 	SoundRate:          "Die Abtastrate ist {0} Hz. Erwartet: 8000 bis 192000 Hz.",
+	SoundSlow:          "Die MP3-Datei hat eine Abtastrate von {0} Hz. Erwartet: 16000 Hz oder mehr; am Aufnahmegerät bessere Qualität oder WAV wählen.",
 	SoundNoSamples:     "In der Datei ist kein Ton. Neu aufnehmen.",
 	SoundDamaged:       "Die Datei ist vor dem ersten Ton beschädigt. Neu aufnehmen oder die Datei neu vom Aufnahmegerät kopieren.",
 	ClickTooShort:      "Die Aufnahme dauert {0} s. Erwartet: mindestens 3 s; ein Ausrollen dauert 20 s oder länger.",

@@ -186,6 +186,9 @@ const (
 
 	// SoundRate: {0} number.
 	SoundRate
+
+	// SoundSlow: {0} number.
+	SoundSlow
 	SoundNoSamples
 	SoundDamaged
 

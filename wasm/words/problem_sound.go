@@ -44,6 +44,8 @@ func (v Voice) soundProblem(e *sound.Error) string {
 		return v.Say(SoundBits, got)
 	case sound.OddRate:
 		return v.Say(SoundRate, got)
+	case sound.SlowMP3:
+		return v.Say(SoundSlow, got)
 	case sound.NoSamples:
 		return v.text(SoundNoSamples)
 	}
