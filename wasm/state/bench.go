@@ -131,8 +131,7 @@ func (s *State) weighRuns() {
 	b := &s.Bench
 	b.stale, b.Result, b.Then, b.ThenRig = false, nil, nil, nil
 	runs, ids := s.counting()
-	setup := s.Question.CoastSetup(s.roadHeight())
-	if b.Result, b.Refused = coast.Fit(runs, setup); b.Refused != nil {
+	if b.Result, b.Refused = coast.Fit(runs, s.CoastSetup()); b.Refused != nil {
 		b.Refused = s.numbered(b.Refused, ids)
 	} else {
 		b.CrrOf, b.CdAOf = s.Question.BikeDrag(b.Result)
@@ -143,6 +142,14 @@ func (s *State) weighRuns() {
 		}
 	}
 	s.judgeSpin()
+}
+
+// CoastSetup is what is known before the runs. The bike's own drag is that of
+// the chosen bike: what the same runs put into it must not count a second time.
+func (s *State) CoastSetup() coast.Setup {
+	q := s.Question
+	q.Bike.Crr, q.Bike.CdAM2 = s.base.Bike.Crr, s.base.Bike.CdAM2
+	return q.CoastSetup(s.roadHeight())
 }
 
 // numbered lets an error name a run by its number on the page, where runs that

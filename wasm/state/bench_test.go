@@ -107,6 +107,20 @@ func TestCoastDownIntoTheBike(t *testing.T) {
 	}
 }
 
+// A number that is held leans on the bike as it was chosen, not on what was put
+// into it: the same runs say the same after the tap, and are not offered again.
+func TestHeldDoesNotCreep(t *testing.T) {
+	s := record(t, atBench(t), coasting(false), 1790000000)
+	first := s.Bench.Result
+	if first == nil || !first.Crr.Held {
+		t.Fatalf("one way on a road that looks level: %+v, %v", first, s.Bench.Refused)
+	}
+	s, _ = Reduce(s, Action{Name: IntoBike})
+	if again := s.Bench.Result; again == nil || again.Crr != first.Crr || again.CdAM2 != first.CdAM2 || !s.BikeHas() {
+		t.Errorf("%+v became %+v", first.Crr, again)
+	}
+}
+
 // A person says which way, what counts, where it is cut; each changes the
 // result, and is kept.
 func TestRunsAreThePersons(t *testing.T) {

@@ -33,7 +33,7 @@ func (v *viewer) drag() *Node {
 		return region("section", "bench-drag", With("aria-labelledby", "drag-title"), head, El("p", Class("problem"), With("role", "alert"), Text(why)))
 	}
 	half := func(e coast.Estimate) float64 { return (e.High - e.Low) / 2 }
-	setup := v.Question.CoastSetup(0)
+	setup := v.State.CoastSetup()
 	notes := Parts{Class("notes-list")}
 	note := func(yes bool, k words.Key, args ...string) {
 		if yes {
